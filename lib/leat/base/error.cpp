@@ -55,4 +55,12 @@ std::string to_text(double number)
     return std::string(buffer.data(), end);
 }
 
+std::string to_short_text(double number)
+{
+    std::array<char, 32> buffer{};
+    const auto [end, error] =
+        std::to_chars(buffer.data(), buffer.data() + buffer.size(), number, std::chars_format::general, 3);
+    return std::string(buffer.data(), end);
+}
+
 } // namespace leat

@@ -70,4 +70,7 @@ private:
 /// A number as text, shortest form that reads back to the same value; independent of the locale.
 std::string to_text(double number);
 
+/// A number as text with three significant digits, for messages; independent of the locale.
+std::string to_short_text(double number);
+
 } // namespace leat

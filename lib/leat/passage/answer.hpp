@@ -1,5 +1,7 @@
 #pragma once
 
+#include <leat/monitor/outcome.hpp>
+
 #include <array>
 #include <optional>
 #include <string>
@@ -7,16 +9,6 @@
 #include <vector>
 
 namespace leat {
-
-/// Which rule ended the solve.
-enum class Outcome {
-    converged,     ///< every imbalance below the tolerance; numbers may be used
-    stalled,       ///< no further progress; numbers marked unusable
-    diverged,      ///< imbalances grew without bound; the best state seen is kept, numbers marked unusable
-    out_of_budget, ///< iterations spent before the tolerance was met; numbers marked unusable
-    cancelled      ///< the caller asked to stop; the best state so far, numbers marked unusable
-};
-std::string_view name(Outcome outcome) noexcept; ///< "converged", "stalled", ...
 
 /// One engineering number with its uncertainty.
 struct Number {
@@ -88,19 +80,6 @@ struct NamedColumn {
     std::string_view unit;
     std::string_view meaning;
     Stations::Column values;
-};
-
-/// Imbalances: sums of |residual| over the control volumes, normalised (README).
-struct Imbalances {
-    double mass = 0;     ///< / inlet mass flow
-    double momentum = 0; ///< / (inlet momentum flux + |pressure drop| x area)
-};
-
-/// One outer iteration.
-struct HistoryRow {
-    int grid = 0;      ///< index into Answer::grids
-    int iteration = 0; ///< from 0 (the state that the iteration started from)
-    Imbalances imbalances;
 };
 
 /// One grid that was worked on, coarsest first.

@@ -1,6 +1,8 @@
 #pragma once
 
 #include <leat/base/error.hpp>
+#include <leat/coupling/coupling.hpp>
+#include <leat/scheme/scheme.hpp>
 
 #include <array>
 #include <optional>
@@ -8,23 +10,11 @@
 
 namespace leat {
 
-/// How a convected value is interpolated to a face (room `scheme` holds the formulas and sources).
-enum class Scheme { upwind, central, power_law, linear_upwind, quick, van_leer, minmod };
-
-/// How velocity and pressure are brought together (room `coupling`).
-enum class Coupling { simple, simplec, lines };
-
 /// The accuracy that is wanted.
 struct Accuracy {
     /// Wanted half-width of the band on the pressure drop, relative to
     /// max(|value|, 1 % of the developed-flow pressure drop over the same length); 1e-5 .. 0.5.
     double band = 0.002;
-};
-
-/// Factors of under-relaxation; each in (0, 1].
-struct Relaxation {
-    double velocity = 0.9; ///< implicit factor of the momentum balances (lines: damping of the update)
-    double pressure = 0.9; ///< part of the pressure correction that is applied
 };
 
 /// How to compute. The defaults serve; every member is for the curious.

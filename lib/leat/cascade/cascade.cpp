@@ -1,0 +1,149 @@
+#include <leat/cascade/cascade.hpp>
+
+#include <algorithm>
+
+namespace leat::cascade {
+
+namespace {
+
+constexpr int coarsest_pairs = 2; // down-up sweeps that stand for a solve on the coarsest grid
+
+template <int D>
+std::pair<double, double> smallest_and_largest_cell(const mesh::Grid<D>& grid, int d)
+{
+    const std::vector<double>& faces = grid.faces(d);
+    double smallest = faces[1] - faces[0];
+    double largest = smallest;
+    for (std::size_t k = 1; k < faces.size(); ++k) {
+        smallest = std::min(smallest, faces[k] - faces[k - 1]);
+        largest = std::max(largest, faces[k] - faces[k - 1]);
+    }
+    return {smallest, largest};
+}
+
+/// Which directions the next coarser grid halves; all false: this is the coarsest.
+template <int D>
+std::array<bool, D> halve(const mesh::Grid<D>& grid, const CascadeSettings& settings)
+{
+    double largest_across = 0;
+    for (int d = 1; d < D; ++d) {
+        largest_across = std::max(largest_across, smallest_and_largest_cell(grid, d).second);
+    }
+    const bool long_cells = smallest_and_largest_cell(grid, 0).first >= settings.coarsen_across_from * largest_across;
+    std::array<bool, D> wanted{};
+    wanted[0] = grid.can_coarsen(0) && grid.cells(0) / 2 >= settings.least_along;
+    for (int d = 1; d < D; ++d) {
+        wanted[d] = (long_cells || !wanted[0]) && grid.can_coarsen(d) && grid.cells(d) / 2 >= settings.least_across;
+    }
+    return wanted;
+}
+
+template <int D>
+void subtract(const coupling::FlowState<D>& a, coupling::FlowState<D>& b) // b = b - a
+{
+    for (int c = 0; c < D; ++c) {
+        for (std::size_t k = 0; k < a.pressure.size(); ++k) {
+            b.velocity[c][k] -= a.velocity[c][k];
+        }
+    }
+    for (std::size_t k = 0; k < a.pressure.size(); ++k) {
+        b.pressure[k] -= a.pressure[k];
+    }
+}
+
+} // namespace
+
+template <int D>
+Cascade<D>::Cascade(const mesh::Grid<D>& finest, const coupling::FlowProblem<D>& problem,
+                    const coupling::FlowState<D>& boundary, const CascadeSettings& settings)
+{
+    mesh::Grid<D> grid = finest;
+    while (true) {
+        Level level;
+        level.equations = std::make_unique<coupling::FlowEquations<D>>(grid, problem);
+        level.coupling = coupling::make_coupling<D>(settings.coupling, *level.equations, settings.coupling_settings);
+        level.residual = coupling::FlowState<D>(level.equations->layout());
+        if (levels_.empty()) {
+            level.state = boundary;
+        } else {
+            level.state = level.source = level.before = level.residual;
+            level.from_finer = std::make_unique<Transfer<D>>(*levels_.back().equations, *level.equations);
+            level.from_finer->restrict_state(levels_.back().state, level.state);
+        }
+        levels_.push_back(std::move(level));
+        const std::array<bool, D> halved = halve(grid, settings);
+        if (std::none_of(halved.begin(), halved.end(), [](bool h) { return h; })) {
+            break;
+        }
+        grid = grid.coarsened(halved);
+    }
+}
+
+template <int D>
+void Cascade<D>::cycle(int level)
+{
+    descend(static_cast<std::size_t>(level), level == 0 ? source_ : nullptr);
+}
+
+template <int D>
+void Cascade<D>::descend(std::size_t l, const coupling::FlowState<D>* source)
+{
+    Level& here = levels_[l];
+    if (l + 1 == levels_.size()) {
+        for (int pair = 0; pair < coarsest_pairs; ++pair) {
+            here.coupling->iterate(here.state, source, false);
+            here.coupling->iterate(here.state, source, true);
+        }
+        return;
+    }
+    here.coupling->iterate(here.state, source, false);
+    here.coupling->iterate(here.state, source, false);
+    here.coupling->iterate(here.state, source, true);
+    here.equations->residual(here.state, source, here.residual);
+    Level& coarse = levels_[l + 1];
+    coarse.from_finer->restrict_state(here.state, coarse.state);
+    coarse.before = coarse.state;
+    // source = balances of the restricted state - restricted residual
+    coarse.from_finer->restrict_residual(here.residual, coarse.residual);
+    coarse.equations->residual(coarse.state, nullptr, coarse.source);
+    subtract(coarse.residual, coarse.source);
+    descend(l + 1, &coarse.source);
+    coarse.residual = coarse.state;
+    subtract(coarse.before, coarse.residual);
+    coarse.from_finer->prolong(coarse.residual, here.state, true);
+}
+
+template <int D>
+void Cascade<D>::iterate(int level, bool backwards)
+{
+    levels_[level].coupling->iterate(levels_[level].state, level == 0 ? source_ : nullptr, backwards);
+}
+
+template <int D>
+void Cascade<D>::start_from_coarser(int level)
+{
+    levels_[level + 1].from_finer->prolong(levels_[level + 1].state, levels_[level].state, false);
+}
+
+template <int D>
+const coupling::FlowState<D>& Cascade<D>::residual(int level)
+{
+    Level& here = levels_[level];
+    here.equations->residual(here.state, level == 0 ? source_ : nullptr, here.residual);
+    return here.residual;
+}
+
+template <int D>
+std::size_t Cascade<D>::bytes() const noexcept
+{
+    std::size_t total = 0;
+    for (const Level& level : levels_) {
+        const std::size_t states = level.from_finer == nullptr ? 2 : 4;
+        total += states * (D + 1) * level.state.pressure.size() * sizeof(double) + level.coupling->bytes();
+    }
+    return total;
+}
+
+template class Cascade<2>;
+
+} // namespace leat::cascade

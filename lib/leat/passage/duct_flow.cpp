@@ -1,0 +1,119 @@
+#include <leat/passage/duct_flow.hpp>
+
+#include <leat/passage/developed.hpp>
+#include <leat/passage/development_length.hpp>
+
+#include <algorithm>
+#include <cmath>
+
+namespace leat::passage {
+
+namespace {
+
+/// Dampings that are tried in turn when the caller chose none: what converges fastest, then what converges surely.
+constexpr std::array<double, 3> dampings = {0.9, 0.7, 0.4};
+
+monitor::Rules rules_for(const Options& options, bool multigrid)
+{
+    monitor::Rules rules;
+    rules.tolerance = options.tolerance;
+    rules.iterations = options.iterations;
+    // A V cycle gains a digit; a single-grid iteration on a fine grid may gain a thousandth of its value.
+    rules.patience = multigrid ? 15 : 1500;
+    return rules;
+}
+
+bool worth_another_try(Outcome outcome)
+{
+    return outcome == Outcome::diverged || outcome == Outcome::stalled;
+}
+
+} // namespace
+
+coupling::FlowProblem<2> duct_problem(const Passage& passage, const Derived& derived, const Options& options)
+{
+    using coupling::FlowSide;
+    coupling::FlowProblem<2> problem;
+    problem.density = 1;
+    problem.viscosity = 1 / derived.reynolds_number;
+    problem.schemes = {options.scheme_along, options.scheme_across};
+    problem.sides[0] = {FlowSide::fixed, FlowSide::open};
+    if (std::holds_alternative<Tube>(passage.shape)) {
+        problem.sides[1] = {FlowSide::symmetry, FlowSide::fixed};
+    } else if (std::holds_alternative<Channel>(passage.shape)) {
+        problem.sides[1] = {FlowSide::fixed, FlowSide::symmetry};
+    } else {
+        problem.sides[1] = {FlowSide::fixed, FlowSide::fixed};
+    }
+    return problem;
+}
+
+coupling::FlowState<2> first_guess(const Passage& passage, const Derived& derived, const DuctGrid& grid)
+{
+    const mesh::Grid<2> cells = grid.grid();
+    const field::Layout<2> layout(cells.cells());
+    coupling::FlowState<2> state(layout);
+    const InletDistribution inlet = make_inlet(passage);
+    const DevelopedFlow developed = developed_flow(passage.shape);
+    const double diameter = derived.hydraulic_diameter;
+    const double development = development_length_estimate(passage.shape, derived.reynolds_number) / diameter;
+    const int across = cells.cells(1);
+    const int along = cells.cells(0);
+    const double start = diameter * grid.across.front();
+    const double end = diameter * grid.across.back();
+    const double whole_developed = developed.flow_fraction(start, end);
+    const double whole_area = developed.section.area_fraction(start, end);
+    // Developed pressure gradient in density u_m^2 per D_h: 2 f = 2 (f Re)/Re.
+    const double gradient = 2 * developed.friction_reynolds / derived.reynolds_number;
+    for (int j = 0; j < across; ++j) {
+        const double from = diameter * grid.across[j];
+        const double to = diameter * grid.across[j + 1];
+        const double share = developed.section.area_fraction(from, to) / whole_area;
+        const double inlet_velocity = inlet.flow_fraction(from, to) / share;
+        const double developed_velocity = developed.flow_fraction(from, to) / whole_developed / share;
+        for (int i = 0; i <= along; ++i) {
+            const double blend = std::exp(-3 * grid.along[i] / development);
+            state.velocity[0][layout.index({i, j})] = blend * inlet_velocity + (1 - blend) * developed_velocity;
+            if (i < along) {
+                state.pressure[layout.index({i, j})] =
+                    gradient * (grid.along.back() - 0.5 * (grid.along[i] + grid.along[i + 1]));
+            }
+        }
+    }
+    return state;
+}
+
+DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const Accuracy& accuracy,
+                         const Options& options, const Observer& observer, const std::stop_token& stop)
+{
+    DuctFlow flow;
+    flow.grid = choose_grid(passage, derived, accuracy, options);
+    flow.reynolds_number = derived.reynolds_number;
+    const mesh::Grid<2> grid = flow.grid.grid();
+    const coupling::FlowProblem<2> problem = duct_problem(passage, derived, options);
+    const coupling::FlowState<2> guess = first_guess(passage, derived, flow.grid);
+
+    cascade::CascadeSettings settings;
+    settings.coupling = options.coupling.value_or(leat::Coupling::lines);
+    cascade::RunSettings run;
+    run.multigrid = settings.coupling == leat::Coupling::lines;
+    run.rules = rules_for(options, run.multigrid);
+    run.observer = observer;
+    run.stop = stop;
+    const bool may_choose = !options.relaxation && settings.coupling == leat::Coupling::lines;
+    for (std::size_t attempt = 0;; ++attempt) {
+        settings.coupling_settings.relaxation =
+            options.relaxation ? *options.relaxation : coupling::default_relaxation(settings.coupling);
+        if (may_choose) {
+            settings.coupling_settings.relaxation = {dampings[attempt], dampings[attempt]};
+            flow.fallback = attempt == 0 ? "" : "stronger damping (" + to_short_text(dampings[attempt]) + ")";
+        }
+        flow.cascade = std::make_unique<cascade::Cascade<2>>(grid, problem, guess, settings);
+        flow.run = cascade::nested_solve(*flow.cascade, run);
+        if (!may_choose || !worth_another_try(flow.run.outcome) || attempt + 1 == dampings.size()) {
+            return flow;
+        }
+    }
+}
+
+} // namespace leat::passage
