@@ -7,14 +7,29 @@ namespace leat::linear {
 
 namespace {
 
+/// The direction along which the nodes of a box are joined in pairs: the last one across the lines that has several
+/// nodes; -1 when there is none. One direction after the other, beginning where a duct's cells are thinnest, because
+/// joining across weak coupling beside strong coupling makes errors that no coarser level can see.
+template <int D>
+int joined_direction(const field::Box<D>& box)
+{
+    int d = D - 2;
+    while (d >= 0 && box.end[d] - box.begin[d] == 1) {
+        --d;
+    }
+    return d;
+}
+
 /// The node of the coarser level that node k is joined into.
 template <int D>
 std::array<int, D> joined(const std::array<int, D>& k, const field::Box<D>& fine)
 {
     std::array<int, D> coarse;
     for (int d = 0; d < D - 1; ++d) {
-        coarse[d] = (k[d] - fine.begin[d]) / 2;
+        coarse[d] = k[d] - fine.begin[d];
     }
+    const int along = joined_direction<D>(fine);
+    coarse[along] /= 2;
     coarse[D - 1] = 0;
     return coarse;
 }
@@ -38,18 +53,13 @@ SymmetricSolver<D>::SymmetricSolver(const field::Layout<D>& layout, const field:
     direction_ = image_ = preconditioned_ = field::zeros(layout);
     line_.resize(static_cast<std::size_t>(length_of<D>(box)) + 1);
     field::Box<D> current = box;
-    while (true) {
+    for (int along = joined_direction<D>(box); along >= 0; along = joined_direction<D>(current)) {
         field::Box<D> next;
         std::array<int, D> cells{};
-        bool smaller = false;
         for (int d = 0; d < D; ++d) {
             const int nodes = current.end[d] - current.begin[d];
-            cells[d] = d == D - 1 ? nodes : (nodes + 1) / 2;
-            smaller = smaller || cells[d] < nodes;
+            cells[d] = d == along ? (nodes + 1) / 2 : nodes;
             next.end[d] = cells[d];
-        }
-        if (!smaller) {
-            break;
         }
         Level level;
         const field::Layout<D> where(cells);
@@ -69,6 +79,7 @@ void SymmetricSolver<D>::prepare(const StencilSystem<D>& finest, bool singular)
     for (std::size_t level = 1; level < levels_.size(); ++level) {
         const StencilSystem<D>& fine = system(level - 1);
         StencilSystem<D>& coarse = levels_[level].system;
+        const int along = joined_direction<D>(fine.box);
         std::fill(coarse.centre.begin(), coarse.centre.end(), 0.0);
         for (int d = 0; d < D; ++d) {
             std::fill(coarse.lower[d].begin(), coarse.lower[d].end(), 0.0);
@@ -83,13 +94,22 @@ void SymmetricSolver<D>::prepare(const StencilSystem<D>& finest, bool singular)
                 coarse.upper[D - 1][to + j] += fine.upper[D - 1][from + j];
             }
             for (int d = 0; d < D - 1; ++d) {
-                // A neighbour that is joined into the same node moves its coefficient to the diagonal.
+                if (d != along) {
+                    for (int j = 0; j < n; ++j) {
+                        coarse.lower[d][to + j] += fine.lower[d][from + j];
+                        coarse.upper[d][to + j] += fine.upper[d][from + j];
+                    }
+                    continue;
+                }
+                // A neighbour that is joined into the same node moves its coefficient to the diagonal. The other one
+                // is at twice the distance afterwards: half of its coefficient stays, half goes to the diagonal.
                 const bool second = (k[d] - fine.box.begin[d]) % 2 == 1;
-                field::Values& below = second ? coarse.centre : coarse.lower[d];
-                field::Values& above = second ? coarse.upper[d] : coarse.centre;
+                const field::Values& inner = second ? fine.lower[d] : fine.upper[d];
+                const field::Values& outer = second ? fine.upper[d] : fine.lower[d];
+                field::Values& towards = second ? coarse.upper[d] : coarse.lower[d];
                 for (int j = 0; j < n; ++j) {
-                    below[to + j] += fine.lower[d][from + j];
-                    above[to + j] += fine.upper[d][from + j];
+                    coarse.centre[to + j] += inner[from + j] + 0.5 * outer[from + j];
+                    towards[to + j] += 0.5 * outer[from + j];
                 }
             }
         });
