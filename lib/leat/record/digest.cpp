@@ -5,11 +5,9 @@
 #include <bit>
 #include <cstdint>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 using Words = std::array<std::uint32_t, 8>;
 constexpr std::size_t block_size = 64;

@@ -3,8 +3,7 @@
 #include <system_error>
 #include <utility>
 
-namespace leat::record
-{
+namespace leat::record {
 
 long long value_of(const FileSystem::Reply& reply, FileError::Action action, const std::string& path,
                    const std::string& what)

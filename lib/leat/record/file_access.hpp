@@ -8,8 +8,7 @@
 #include <span>
 #include <string>
 
-namespace leat::record
-{
+namespace leat::record {
 
 /// One file operation, done again while a signal interrupts it.
 template <class Operation>
@@ -20,8 +19,7 @@ long long value_of(const FileSystem::Reply& reply, FileError::Action action, con
                    const std::string& what);
 
 /// An open file or folder; closed at the end, at the latest.
-class OpenFile
-{
+class OpenFile {
 public:
     OpenFile(FileSystem& file_system, long long descriptor, std::string path);
     OpenFile(const OpenFile&) = delete;

@@ -3,13 +3,11 @@
 #include <cstddef>
 #include <string>
 
-namespace leat::record
-{
+namespace leat::record {
 
 /// The file operations that the record room needs, as an interface so that every one of them can be made to fail.
 /// Each is one POSIX call; none retries.
-class FileSystem
-{
+class FileSystem {
 public:
     /// What came back: `error` is an errno value, 0 for success; `value` is meant only then.
     struct Reply {

@@ -2,8 +2,7 @@
 
 #include <mutex>
 
-namespace leat::record
-{
+namespace leat::record {
 
 /// Held by this library whenever it uses HDF5, whose usual builds are not thread-safe. A host with HDF5 calls of its
 /// own in other threads holds it around them.

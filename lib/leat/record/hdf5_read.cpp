@@ -3,11 +3,9 @@
 #include <functional>
 #include <numeric>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 Hdf5Handle open_attribute(const Hdf5Handle& owner, const std::string& name)
 {

@@ -5,8 +5,7 @@
 #include <string>
 #include <vector>
 
-namespace leat::record
-{
+namespace leat::record {
 
 /// The counterparts of hdf5_write.hpp. All throw Hdf5Failure, also when something has another type or shape.
 Hdf5Handle open_group(const Hdf5Handle& parent, const std::string& name);

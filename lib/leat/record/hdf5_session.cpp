@@ -3,8 +3,7 @@
 
 #include <utility>
 
-namespace leat::record
-{
+namespace leat::record {
 
 std::mutex& hdf5_mutex() noexcept
 {

@@ -7,20 +7,17 @@
 #include <mutex>
 #include <string>
 
-namespace leat::record
-{
+namespace leat::record {
 
 /// An HDF5 call failed. Inside the record room only: callers turn it into a FileError.
-class Hdf5Failure : public Error
-{
+class Hdf5Failure : public Error {
 public:
     using Error::Error;
 };
 
 /// Sole use of HDF5 while it lives, without its error printing; the host's error handler comes back at the end.
 /// Must outlive every Hdf5Handle made under it.
-class Hdf5Session
-{
+class Hdf5Session {
 public:
     Hdf5Session();
     ~Hdf5Session();
@@ -38,8 +35,7 @@ private:
 };
 
 /// Owns one HDF5 identifier.
-class Hdf5Handle
-{
+class Hdf5Handle {
 public:
     using Close = herr_t (*)(hid_t);
 

@@ -2,11 +2,9 @@
 
 #include <algorithm>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 Hdf5Handle space_of(const Extents& extents)
 {

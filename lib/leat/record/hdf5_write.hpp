@@ -7,8 +7,7 @@
 #include <string_view>
 #include <vector>
 
-namespace leat::record
-{
+namespace leat::record {
 
 /// Lengths of an array, slowest first; empty: a single value.
 using Extents = std::vector<hsize_t>;

@@ -9,11 +9,9 @@
 #include <string>
 #include <type_traits>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 constexpr double not_a_number = std::numeric_limits<double>::quiet_NaN();
 

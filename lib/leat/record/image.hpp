@@ -6,8 +6,7 @@
 #include <string_view>
 #include <vector>
 
-namespace leat::record
-{
+namespace leat::record {
 
 /// The bytes of the .h5 file of an answer, sealed, made in memory only. Equal input gives equal bytes.
 /// Throws InvalidInput (see require_recordable()) or Hdf5Failure.

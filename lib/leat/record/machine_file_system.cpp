@@ -8,11 +8,9 @@
 #include <sys/stat.h>
 #include <unistd.h>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 // Some systems refuse, others shorten, transfers of 2 GiB and more.
 constexpr std::size_t largest_transfer = std::size_t{1} << 30;
@@ -26,8 +24,7 @@ FileSystem::Reply reply(long long value)
 
 FileSystem::Reply MachineFileSystem::kind(const std::string& path)
 {
-    struct stat status {
-    };
+    struct stat status {};
     if (::lstat(path.c_str(), &status) != 0) {
         return errno == ENOENT ? Reply{absent, 0} : Reply{0, errno};
     }
@@ -55,8 +52,7 @@ FileSystem::Reply MachineFileSystem::open_folder(const std::string& path)
 
 FileSystem::Reply MachineFileSystem::size(int descriptor)
 {
-    struct stat status {
-    };
+    struct stat status {};
     if (::fstat(descriptor, &status) != 0) {
         return {0, errno};
     }

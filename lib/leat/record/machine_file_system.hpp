@@ -2,12 +2,10 @@
 
 #include <leat/record/file_system.hpp>
 
-namespace leat::record
-{
+namespace leat::record {
 
 /// The file operations of this machine. Has no state.
-class MachineFileSystem final : public FileSystem
-{
+class MachineFileSystem final : public FileSystem {
 public:
     Reply kind(const std::string& path) override;
     Reply create_new(const std::string& path) override;

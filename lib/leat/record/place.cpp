@@ -7,11 +7,9 @@
 
 #include <unistd.h>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 using Action = FileError::Action;
 

@@ -5,8 +5,7 @@
 #include <string>
 #include <vector>
 
-namespace leat::record
-{
+namespace leat::record {
 
 /// Throws FileError(create) unless `name` with an extension can be a file name that an XDMF reference can hold: not
 /// empty, no leading or trailing blank, no '/', ':' or control character. Nor may `directory` hold a NUL.

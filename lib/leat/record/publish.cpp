@@ -5,11 +5,9 @@
 
 #include <utility>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 using Action = FileError::Action;
 
@@ -20,8 +18,7 @@ bool not_offered(int error)
 }
 
 // What has been done, so that it can be undone.
-class Publication
-{
+class Publication {
 public:
     Publication(FileSystem& file_system, const std::string& directory) : files_(file_system), directory_(directory) {}
 

@@ -7,8 +7,7 @@
 #include <string>
 #include <vector>
 
-namespace leat::record
-{
+namespace leat::record {
 
 /// A file that is to appear in a folder.
 struct NewFile {

@@ -7,11 +7,9 @@
 #include <array>
 #include <cmath>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 // The bytes of a sealed file, verified. The block is looked at first: a foreign file may be of any size.
 std::vector<std::byte> verified_bytes(FileSystem& file_system, const std::string& path)

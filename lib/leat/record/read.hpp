@@ -8,8 +8,7 @@
 #include <string>
 #include <vector>
 
-namespace leat::record
-{
+namespace leat::record {
 
 class FileSystem;
 

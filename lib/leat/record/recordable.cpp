@@ -6,11 +6,9 @@
 #include <span>
 #include <string>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 void check_array(Faults& faults, const std::string& name, std::span<const double> values, std::size_t length)
 {

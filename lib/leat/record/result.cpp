@@ -7,11 +7,9 @@
 #include <leat/record/result.hpp>
 #include <leat/record/xdmf.hpp>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 std::string folder_of(const std::string& directory)
 {

@@ -5,8 +5,7 @@
 
 #include <string>
 
-namespace leat::record
-{
+namespace leat::record {
 
 class FileSystem;
 

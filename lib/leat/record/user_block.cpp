@@ -5,11 +5,9 @@
 #include <charconv>
 #include <string_view>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 constexpr std::string_view first_words = "leat-result ";
 constexpr std::string_view length_word = "\nlength ";

@@ -4,8 +4,7 @@
 #include <span>
 #include <string>
 
-namespace leat::record
-{
+namespace leat::record {
 
 /// Version of the layout of a result file; part of the contract with its readers.
 inline constexpr int format_version = 1;

@@ -1,10 +1,8 @@
 #include <leat/record/xdmf.hpp>
 
-namespace leat::record
-{
+namespace leat::record {
 
-namespace
-{
+namespace {
 
 std::string escaped(const std::string& text)
 {
