@@ -44,7 +44,7 @@ Transport<D>::Transport(const mesh::Grid<D>& grid, int shift, const Setup& setup
                 const double scale = volumes_.area_factor[d][d][end == 0 ? 0 : nodes];
                 const double inner = setup.diffusivity * factor;
                 const double outer = side.coefficient * scale;
-                factor = setup.diffusivity > 0 ? inner * outer / ((inner + outer) * setup.diffusivity) : 0;
+                factor = inner > 0 ? inner * outer / ((inner + outer) * setup.diffusivity) : 0;
             }
         }
         sink_[d] = volumes_.volume_factor[d];

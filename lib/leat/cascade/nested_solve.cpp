@@ -7,6 +7,7 @@ namespace leat::cascade {
 
 namespace {
 
+constexpr double worse_start = 10;     // a coarse grid whose imbalance grew by this is no start for a finer one
 constexpr double worth_keeping = 0.1; // a state is copied when its imbalance is below this times the kept one's
 
 /// Runs one grid and keeps its books.
@@ -53,13 +54,15 @@ private:
     std::chrono::steady_clock::time_point start_;
 };
 
-/// Makes a coarse grid good enough to start from. False when asked to stop, or when what came out is not finite.
+/// Makes a coarse grid good enough to start from. False when asked to stop, or when what came out is worse than what
+/// went in, or not finite.
 template <int D>
 bool prepare_coarse(Cascade<D>& cascade, const RunSettings& settings, int level, Run<D>& run)
 {
     GridRunner<D> runner(cascade, settings, level, run);
     int done = 0;
-    double worst = runner.look(0).worst();
+    const double first = runner.look(0).worst();
+    double worst = first;
     if (settings.multigrid && level + 1 < cascade.levels()) {
         cascade.cycle(level);
         worst = runner.look(++done).worst();
@@ -74,7 +77,7 @@ bool prepare_coarse(Cascade<D>& cascade, const RunSettings& settings, int level,
         }
     }
     runner.close(done);
-    return !runner.stopped() && std::isfinite(worst);
+    return !runner.stopped() && std::isfinite(worst) && worst <= worse_start * first;
 }
 
 template <int D>

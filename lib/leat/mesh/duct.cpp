@@ -12,7 +12,7 @@ namespace {
 constexpr int least_coarse_cells = 5;     // of the passage on the coarsest grid
 constexpr double gentle_growth = 6;       // of ln(cell size) per `cells` cells of the tail
 constexpr int longest_tail = 2;           // in units of the passage's cells
-constexpr double logarithmic_share = 0.7; // of ln(outer/inner) taken up by the inner wall's extra clustering
+constexpr double logarithmic_share = 0.6; // of ln(outer/inner) taken up by the inner wall's extra clustering
 
 /// The length of a tail whose cells start at `step` and grow by exp(growth) per unit.
 double tail_reach(double step, double growth, double units)

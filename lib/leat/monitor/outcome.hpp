@@ -22,10 +22,7 @@ struct Imbalances {
     double momentum = 0; ///< / (inlet momentum flux + |pressure drop| x area)
 
     /// The larger of the two; not finite when one is not.
-    double worst() const noexcept
-    {
-        return mass != mass || momentum != momentum ? mass + momentum : (mass > momentum ? mass : momentum);
-    }
+    double worst() const noexcept { return (mass > momentum ? mass : momentum) + 0 * mass + 0 * momentum; }
 };
 
 /// The imbalances after one outer iteration.

@@ -2,11 +2,9 @@
 
 #include <algorithm>
 
-namespace leat
-{
+namespace leat {
 
-namespace
-{
+namespace {
 
 /// A number that every answer has.
 NamedNumber present(std::string_view name, std::string_view unit, std::string_view meaning, const Number& number)

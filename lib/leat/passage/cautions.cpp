@@ -4,11 +4,9 @@
 #include <leat/passage/laminar_limit.hpp>
 #include <leat/passage/rounded_text.hpp>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
-namespace
-{
+namespace {
 
 /// A number beside a threshold: as short as it can be without looking equal to it.
 std::string beside(double number, double threshold)

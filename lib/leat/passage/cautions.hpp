@@ -5,8 +5,7 @@
 #include <string>
 #include <vector>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 /// Thresholds of the cautions, chosen here from practice.
 inline constexpr double short_passage = 3;            ///< hydraulic diameters

@@ -3,11 +3,9 @@
 
 #include <numbers>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
-namespace
-{
+namespace {
 
 void measure(const Tube& tube, Derived& derived)
 {

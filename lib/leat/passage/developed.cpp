@@ -2,11 +2,9 @@
 
 #include <algorithm>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
-namespace
-{
+namespace {
 
 DevelopedFlow flow(const Tube&)
 {

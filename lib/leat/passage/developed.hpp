@@ -6,8 +6,7 @@
 
 #include <optional>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 /// Exact fully developed laminar flow in a shape (Shah & London 1978, chapters V, VI and XII).
 /// Positions are those of Section: radius, or distance from the lower wall of a channel (the whole gap).

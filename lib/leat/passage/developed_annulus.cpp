@@ -4,11 +4,9 @@
 #include <cmath>
 #include <limits>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
-namespace
-{
+namespace {
 
 constexpr double series_end = 0.5; // below it the closed forms lose digits, above it the series are slow
 

@@ -1,7 +1,6 @@
 #pragma once
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 /// Exact fully developed laminar flow in a concentric annulus (Lamb; Bird, Stewart & Lightfoot 1960, section 2.4;
 /// Shah & London 1978, chapter XII), written so that nothing cancels: good to about 1e-13 from inner/outer = 1e-3
@@ -9,8 +8,7 @@ namespace leat::passage
 ///
 /// With r in units of the outer radius, kappa = inner/outer and m^2 = (1 - kappa^2)/(2 ln 1/kappa):
 /// u/u_m = 2 g/M, g = 1 - r^2 + 2 m^2 ln r, M = 1 + kappa^2 - 2 m^2.
-class AnnulusProfile
-{
+class AnnulusProfile {
 public:
     /// Both diameters in m, 0 < inner < outer.
     AnnulusProfile(double inner_diameter, double outer_diameter);

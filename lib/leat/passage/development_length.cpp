@@ -2,11 +2,9 @@
 
 #include <cmath>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
-namespace
-{
+namespace {
 
 double blend(double creeping, double boundary_layer)
 {

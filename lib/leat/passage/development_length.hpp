@@ -2,8 +2,7 @@
 
 #include <leat/passage/passage.hpp>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 /// Length (m) after which the core velocity of a flat inlet is within 1 % of its developed value, by Durst, Ray, Unsal
 /// & Bayoumi 2005 (J. Fluids Eng. 127, 1154-1160): L/D = [0.619^1.6 + (0.0567 Re_D)^1.6]^(1/1.6) for a tube,

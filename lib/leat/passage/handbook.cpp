@@ -3,11 +3,9 @@
 #include <leat/passage/rounded_text.hpp>
 #include <leat/passage/shah_correlation.hpp>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
-namespace
-{
+namespace {
 
 double pressure_drop(double friction_reynolds, const Derived& derived)
 {

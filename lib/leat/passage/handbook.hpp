@@ -3,8 +3,7 @@
 #include <leat/passage/answer.hpp>
 #include <leat/passage/passage.hpp>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 /// What a handbook gives for the pressure drop of a valid passage, Delta p = 4 f_app L/D_h rho u_m^2/2:
 /// flat inlet, by the correlation of Shah 1978 where its constants exist (see shah_constants); developed inlet, by the

@@ -1,7 +1,6 @@
 #include <leat/passage/inlet_profile.hpp>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 InletDistribution::InletDistribution(const Passage& passage) : section_(section_of(passage.shape))
 {

@@ -7,13 +7,11 @@
 
 #include <variant>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 /// How the inlet flow is spread over the part of the section that is solved: radius of a tube (0 .. diameter/2) or an
 /// annulus, distance from the lower wall of a channel up to its middle (0 .. gap/2).
-class InletDistribution
-{
+class InletDistribution {
 public:
     /// For a valid passage (see faults_of).
     explicit InletDistribution(const Passage& passage);
@@ -24,8 +22,7 @@ public:
     double velocity_ratio(double position) const noexcept;
 
 private:
-    struct Flat {
-    };
+    struct Flat {};
     Section section_;
     std::variant<Flat, DevelopedFlow, TabulatedProfile> profile_;
 };

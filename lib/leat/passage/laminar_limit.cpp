@@ -1,10 +1,8 @@
 #include <leat/passage/laminar_limit.hpp>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
-namespace
-{
+namespace {
 
 LaminarLimit limit(const Tube&)
 {

@@ -4,8 +4,7 @@
 
 #include <string_view>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 /// Up to which Reynolds number a flow in practice stays laminar.
 struct LaminarLimit {

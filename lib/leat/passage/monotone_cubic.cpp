@@ -5,11 +5,9 @@
 #include <cmath>
 #include <utility>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
-namespace
-{
+namespace {
 
 /// Slope at a point with widths and secants to both sides, from the parabola through the three points.
 double parabola_slope(double left, double left_secant, double right, double right_secant)

@@ -3,14 +3,12 @@
 #include <cstddef>
 #include <vector>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 /// A curve through points by piecewise cubics that are monotone between them (Fritsch & Carlson 1980, SIAM J. Numer.
 /// Anal. 17, 238-246; their region of radius 3). Start slopes come from the parabola through three neighbours, so that
 /// a parabola without an extremum between points is met exactly.
-class MonotoneCubic
-{
+class MonotoneCubic {
 public:
     /// `position` strictly increasing, at least 2; `value` as many; all finite.
     MonotoneCubic(std::vector<double> position, std::vector<double> value);

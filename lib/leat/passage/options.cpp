@@ -3,11 +3,9 @@
 #include <cmath>
 #include <string>
 
-namespace leat
-{
+namespace leat {
 
-namespace
-{
+namespace {
 
 void require_within(const std::string& field, double number, double least, double most, Faults& faults)
 {

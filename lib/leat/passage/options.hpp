@@ -21,16 +21,17 @@ struct Accuracy {
 struct Options {
     Scheme scheme_along = Scheme::linear_upwind; ///< convection along the passage
     Scheme scheme_across = Scheme::central;      ///< convection across it
-    std::optional<Coupling> coupling;            ///< default: the fastest, see DEVELOPERS.md
+    std::optional<Coupling> coupling{};          ///< default: the fastest, see DEVELOPERS.md
     /// Cells along and across the solved part of the passage (the tail of `continues` comes on top);
-    /// along a multiple of 8, across a multiple of 4, 16 x 8 .. 5120 x 1280. Default: chosen from shape, length, Reynolds number and band.
-    std::optional<std::array<int, 2>> cells;
-    std::optional<Relaxation> relaxation; ///< default: chosen by the coupling
-    int iterations = 20000;               ///< most outer iterations on the finest grid, >= 1
+    /// along a multiple of 8, across a multiple of 4, 16 x 8 .. 5120 x 1280. Default: chosen from shape, length,
+    /// Reynolds number and band.
+    std::optional<std::array<int, 2>> cells{};
+    std::optional<Relaxation> relaxation{}; ///< default: chosen by the coupling
+    int iterations = 20000;                 ///< most outer iterations on the finest grid, >= 1
     /// Converged when every imbalance (mass, momentum; normalised as in the README) <= tolerance; 1e-14 .. 1e-2.
     double tolerance = 1e-9;
     /// Distances from the inlet (m), increasing, within [0, length], at which stations are read; empty: a default list.
-    std::vector<double> stations;
+    std::vector<double> stations{};
     bool keep_fields = false; ///< fill Answer::fields (wanted for a result file)
 };
 

@@ -7,11 +7,9 @@
 #include <string>
 #include <string_view>
 
-namespace leat
-{
+namespace leat {
 
-namespace
-{
+namespace {
 
 void note_faults(const Tube& tube, Faults& faults)
 {

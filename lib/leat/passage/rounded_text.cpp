@@ -3,8 +3,7 @@
 #include <array>
 #include <charconv>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 std::string rounded_text(double number)
 {

@@ -1,10 +1,8 @@
 #include <leat/passage/section.hpp>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
-namespace
-{
+namespace {
 
 Section section(const Tube& tube)
 {

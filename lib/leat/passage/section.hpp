@@ -2,8 +2,7 @@
 
 #include <leat/passage/passage.hpp>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 /// The coordinate across a section: radius for a tube and an annulus, distance from the lower wall for a channel.
 struct Section {

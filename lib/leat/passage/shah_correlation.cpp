@@ -5,11 +5,9 @@
 #include <array>
 #include <cmath>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
-namespace
-{
+namespace {
 
 struct TableRow {
     double ratio;  // inner/outer diameter

@@ -5,8 +5,7 @@
 #include <optional>
 #include <string>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 /// Constants of the correlation of Shah 1978 (J. Fluids Eng. 100, 177-179) for the apparent friction of a duct with a
 /// flat inlet, from the inlet to x.

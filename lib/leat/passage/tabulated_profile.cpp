@@ -3,11 +3,9 @@
 #include <algorithm>
 #include <cmath>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
-namespace
-{
+namespace {
 
 double largest_velocity(const VelocityTable& table)
 {

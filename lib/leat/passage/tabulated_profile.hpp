@@ -5,8 +5,7 @@
 #include <leat/passage/passage.hpp>
 #include <leat/passage/section.hpp>
 
-namespace leat::passage
-{
+namespace leat::passage {
 
 /// Notes in `faults`, under "inlet.table", what is wrong with a table for a valid shape: sizes, values that are not
 /// finite, order, positions that do not cover the section (ends within 1e-6 of its width), a channel's profile that is
@@ -15,8 +14,7 @@ void note_table_faults(const VelocityTable& table, const Shape& shape, Faults& f
 
 /// A table's profile over the whole section, scaled to mean 1. The points are mirrored at the axis of a tube and, when
 /// they end there, in the middle of a channel, so that the curve is smooth across.
-class TabulatedProfile
-{
+class TabulatedProfile {
 public:
     /// For a table without faults.
     TabulatedProfile(const VelocityTable& table, const Shape& shape);
