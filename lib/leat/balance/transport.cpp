@@ -1,5 +1,7 @@
 #include <leat/balance/transport.hpp>
 
+#include <leat/base/error.hpp>
+
 namespace leat::balance {
 
 namespace {
@@ -40,6 +42,9 @@ Transport<D>::Transport(const mesh::Grid<D>& grid, int shift, const Setup& setup
             if (side.kind == Side::Kind::flux) {
                 factor = 0;
             } else if (side.kind == Side::Kind::exchange) {
+                if (d == 2 && grid.coordinates() == mesh::Coordinates::cylindrical) {
+                    throw InvalidInput({{"sides[2]", "exchange", "must be value or flux where the angle is constant"}});
+                }
                 // diffusion to the face and exchange beyond it in series, per unit of face area
                 const double scale = volumes_.area_factor[d][d][end == 0 ? 0 : nodes];
                 const double inner = setup.diffusivity * factor;

@@ -36,6 +36,8 @@ public:
         bool hoop = false; ///< adds diffusivity x value/r^2 per volume: the hoop term of a radial component
     };
 
+    /// Throws InvalidInput for exchange through a side of constant angle: the distance to it grows with the radius
+    /// and the exchange does not, so that their sum in series is no product of one-dimensional factors.
     Transport(const mesh::Grid<D>& grid, int shift, const Setup& setup);
 
     const mesh::ControlVolumes<D>& volumes() const noexcept { return volumes_; }
