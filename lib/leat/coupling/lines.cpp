@@ -35,14 +35,16 @@ void LinesCoupling::iterate(FlowState<2>& state, const FlowState<2>* source, boo
 {
     const int stations = equations_.grid().cells(0);
     for (int k = 0; k < stations; ++k) {
-        correct_station(state, source, backwards ? stations - 1 - k : k);
+        correct_station(state, source, backwards ? stations - 1 - k : k, backwards);
     }
 }
 
-void LinesCoupling::correct_station(FlowState<2>& state, const FlowState<2>* source, int station)
+void LinesCoupling::correct_station(FlowState<2>& state, const FlowState<2>* source, int station, bool backwards)
 {
     const field::Box<2>& axial = equations_.momentum(0).solved();
-    const bool downstream = station + 1 < axial.end[0];
+    // Where an end is closed, the sweep against the flow is the mirror image of the one with it.
+    const bool mirrored = backwards && equations_.problem().closed();
+    const bool downstream = mirrored ? station < axial.begin[0] : station + 1 < axial.end[0];
     const int face = downstream ? station + 1 : station;
     const double sign = downstream ? 1 : -1;
     gather(state, source, station, face);

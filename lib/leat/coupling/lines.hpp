@@ -21,7 +21,7 @@ public:
     std::size_t bytes() const noexcept override;
 
 private:
-    void correct_station(FlowState<2>& state, const FlowState<2>* source, int station);
+    void correct_station(FlowState<2>& state, const FlowState<2>* source, int station, bool backwards);
     void gather(FlowState<2>& state, const FlowState<2>* source, int station, int face);
     void form_bands(int station, int face, double sign);
     void solve_bands();

@@ -3,15 +3,23 @@
 #include <leat/passage/developed.hpp>
 #include <leat/passage/development_length.hpp>
 
-#include <algorithm>
+#include <array>
 #include <cmath>
 
 namespace leat::passage {
 
 namespace {
 
-/// Dampings that are tried in turn when the caller chose none: what converges fastest, then what converges surely.
-constexpr std::array<double, 3> dampings = {0.9, 0.7, 0.4};
+/// What is tried in turn when the caller chose neither coupling nor relaxation: what converges fastest, then what
+/// backflow through the end needs, then a smoother that is slow but hard to upset.
+struct Attempt {
+    leat::Coupling coupling;
+    Relaxation relaxation;
+    const char* description;
+};
+constexpr std::array<Attempt, 3> attempts = {{{leat::Coupling::lines, {0.9, 0.9}, ""},
+                                              {leat::Coupling::lines, {0.5, 0.5}, "stronger damping (0.5)"},
+                                              {leat::Coupling::simplec, {0.8, 1.0}, "SIMPLEC as smoother"}}};
 
 monitor::Rules rules_for(const Options& options, bool multigrid)
 {
@@ -95,25 +103,27 @@ DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const A
 
     cascade::CascadeSettings settings;
     settings.coupling = options.coupling.value_or(leat::Coupling::lines);
+    settings.coupling_settings.relaxation =
+        options.relaxation.value_or(coupling::default_relaxation(settings.coupling));
     cascade::RunSettings run;
     run.multigrid = settings.coupling == leat::Coupling::lines;
     run.rules = rules_for(options, run.multigrid);
     run.observer = observer;
     run.stop = stop;
-    const bool may_choose = !options.relaxation && settings.coupling == leat::Coupling::lines;
-    for (std::size_t attempt = 0;; ++attempt) {
-        settings.coupling_settings.relaxation =
-            options.relaxation ? *options.relaxation : coupling::default_relaxation(settings.coupling);
+    const bool may_choose = !options.relaxation && !options.coupling;
+    for (const Attempt& attempt : attempts) {
         if (may_choose) {
-            settings.coupling_settings.relaxation = {dampings[attempt], dampings[attempt]};
-            flow.fallback = attempt == 0 ? "" : "stronger damping (" + to_short_text(dampings[attempt]) + ")";
+            settings.coupling = attempt.coupling;
+            settings.coupling_settings.relaxation = attempt.relaxation;
+            flow.fallback = attempt.description;
         }
         flow.cascade = std::make_unique<cascade::Cascade<2>>(grid, problem, guess, settings);
         flow.run = cascade::nested_solve(*flow.cascade, run);
-        if (!may_choose || !worth_another_try(flow.run.outcome) || attempt + 1 == dampings.size()) {
-            return flow;
+        if (!may_choose || !worth_another_try(flow.run.outcome)) {
+            break;
         }
     }
+    return flow;
 }
 
 } // namespace leat::passage
