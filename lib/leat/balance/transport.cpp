@@ -23,6 +23,17 @@ End end_of(const Side& side)
     return End::on_node;
 }
 
+/// Diffusion and hoop term together are r d/dr[(1/r) d(r v)/dr], which is differenced as it stands: as conductances
+/// r_below r_above/(r_face distance) and what is left over, this. Differenced one by one, the two leave an error like
+/// (cell size)^2/r, which raises that at the axis to (cell size)^2 ln(cell size).
+double hoop_factor(double lower_face, double node, double upper_face)
+{
+    if (node <= 0) {
+        return 0;
+    }
+    return (lower_face > 0 ? node / lower_face : 2) - node / upper_face; // (1/r) d(r v)/dr = 2 v/r on the axis
+}
+
 } // namespace
 
 template <int D>
@@ -36,6 +47,12 @@ Transport<D>::Transport(const mesh::Grid<D>& grid, int shift, const Setup& setup
         schemes_.emplace_back(setup.schemes[d], volumes_.node[d], volumes_.face[d], nodes,
                               std::array<End, 2>{end_of(setup.sides[d][0]), end_of(setup.sides[d][1])});
         conductance_[d] = volumes_.conductance_factor[d];
+        if (d == 1 && setup.hoop) {
+            for (int k = 0; k <= nodes; ++k) {
+                const double r = volumes_.face[1][k];
+                conductance_[1][1][k] *= r > 0 ? volumes_.node[1][k - 1] * volumes_.node[1][k] / (r * r) : 0;
+            }
+        }
         for (int end = 0; end < 2; ++end) {
             const Side& side = setup.sides[d][end];
             double& factor = conductance_[d][d][end == 0 ? 0 : nodes];
@@ -55,8 +72,8 @@ Transport<D>::Transport(const mesh::Grid<D>& grid, int shift, const Setup& setup
         sink_[d] = volumes_.volume_factor[d];
         if (d == 1) {
             for (int k = 0; k < nodes; ++k) {
-                const double r = volumes_.node[1][k];
-                sink_[1][k] = setup.hoop && r > 0 ? volumes_.volume_factor[1][k] / (r * r) : 0;
+                sink_[1][k] =
+                    setup.hoop ? hoop_factor(volumes_.face[1][k], volumes_.node[1][k], volumes_.face[1][k + 1]) : 0;
             }
         }
     }
