@@ -9,9 +9,9 @@ namespace leat {
 
 /// One thing that is wrong with an input.
 struct Fault {
-    std::string field; ///< the member at fault, spelled as in the structs: "inlet.mean_velocity"
-    std::string value; ///< what it holds, as text
-    std::string valid; ///< what would be right: "must be > 0 m/s"
+    std::string field{}; ///< the member at fault, spelled as in the structs: "inlet.mean_velocity"
+    std::string value{}; ///< what it holds, as text
+    std::string valid{}; ///< what would be right: "must be > 0 m/s"
 
     /// "inlet.mean_velocity = -0.45: must be > 0 m/s"
     std::string text() const;
@@ -48,7 +48,7 @@ public:
 
 private:
     Action action_;
-    std::string path_;
+    std::string path_{};
 };
 
 /// Collects faults over a whole input, then throws them together.

@@ -28,8 +28,10 @@ std::optional<Outcome> Judge::judge(const Imbalances& imbalances)
         ++since_progress_;
     }
     if (!std::isfinite(worst) || (first_ > 0 && worst > rules_.growth * first_)) {
-        message_ = "diverged: imbalances (" + pair_text(imbalances) + ") after " + std::to_string(count_ - 1) +
-                   " iterations exceed " + to_short_text(rules_.growth) + " times the first or are not finite";
+        const std::string after = " after " + std::to_string(count_ - 1) + " iterations";
+        message_ = std::isfinite(worst) ? "diverged: imbalances (" + pair_text(imbalances) + ")" + after + " exceed " +
+                                              to_short_text(rules_.growth) + " times the first"
+                                        : "diverged: imbalances" + after + " are not finite";
         return Outcome::diverged;
     }
     if (worst <= rules_.tolerance) {

@@ -15,7 +15,7 @@ struct Number {
     double value = 0;             ///< always finite, SI
     std::optional<double> band{}; ///< half-width, same unit: holds the exact solution of the stated model
     bool usable = true;           ///< false: do not design with it, see reason
-    std::string reason;           ///< why there is no band, or why it is not usable; else empty
+    std::string reason{};           ///< why there is no band, or why it is not usable; else empty
 };
 
 /// The numbers of design and trade. Definitions follow Shah & London (1978): README, "What the numbers mean".
@@ -49,11 +49,11 @@ struct Numbers {
 
 /// One row of the list of numbers, for printing and storing.
 struct NamedNumber {
-    std::string_view name;          ///< as the member of Numbers
-    std::string_view unit;          ///< SI, "1" when dimensionless; per metre of width for a channel ("W/m")
-    std::string_view meaning;       ///< a few words
+    std::string_view name{};          ///< as the member of Numbers
+    std::string_view unit{};          ///< SI, "1" when dimensionless; per metre of width for a channel ("W/m")
+    std::string_view meaning{};       ///< a few words
     std::optional<Number> number{}; ///< empty: `reason` says why
-    std::string reason;
+    std::string reason{};
 };
 
 /// Values along the passage; all vectors have the length of x. Empty optional: has no limit or is not defined there.
@@ -76,9 +76,9 @@ struct Stations {
 
 /// One row of a list of station columns.
 struct NamedColumn {
-    std::string_view name; ///< as the member of Stations
-    std::string_view unit;
-    std::string_view meaning;
+    std::string_view name{}; ///< as the member of Stations
+    std::string_view unit{};
+    std::string_view meaning{};
     Stations::Column values;
 };
 
@@ -105,15 +105,15 @@ struct Fields {
 /// The developed-flow and handbook view of the same passage, to stand beside the computed numbers.
 struct HandbookEstimate {
     std::optional<double> pressure_drop{}; ///< Pa; empty where no handbook constants exist
-    std::string source;                    ///< the correlation, by author and year
-    std::string remark;                    ///< "constants interpolated between r* = 0.1 and 0.5"; why none; else empty
+    std::string source{};                    ///< the correlation, by author and year
+    std::string remark{};                    ///< "constants interpolated between r* = 0.1 and 0.5"; why none; else empty
 };
 
 /// What comes back from a solve.
 struct Answer {
     Outcome outcome = Outcome::stalled;
     bool usable = false; ///< the numbers may be used
-    std::string message; ///< one sentence: which rule fired, with its values
+    std::string message{}; ///< one sentence: which rule fired, with its values
     Numbers numbers;
     Stations stations;
     Imbalances imbalances;

@@ -18,7 +18,7 @@ HandbookEstimate flat_estimate(const Passage& passage, const Derived& derived)
     HandbookEstimate estimate;
     const std::optional<ShahConstants> constants = shah_constants(passage.shape);
     if (!constants) {
-        estimate.source = "none";
+        estimate.source.clear();
         estimate.remark = "the constants of Shah 1978 cover annuli from r* = " + rounded_text(shah_least_ratio) +
                           " to " + rounded_text(shah_largest_ratio);
         return estimate;
@@ -58,7 +58,7 @@ HandbookEstimate handbook_estimate(const Passage& passage, const Derived& derive
     case InletProfile::table:
         break;
     }
-    return {.pressure_drop = std::nullopt, .source = "none", .remark = "no handbook formula for a tabulated inlet"};
+    return {.pressure_drop = std::nullopt, .source = {}, .remark = "no handbook formula for a tabulated inlet"};
 }
 
 } // namespace leat::passage

@@ -28,7 +28,7 @@ struct Plan {
     double tail_length = 0;                ///< m solved beyond the end; 0 when cut
     double memory_bytes = 0;               ///< about
     HandbookEstimate handbook;
-    std::string regime;                ///< "laminar: Re 111 is below 2300 (...)"
+    std::string regime{};                ///< "laminar: Re 111 is below 2300 (...)"
     std::vector<std::string> cautions; ///< those that are known before solving
 };
 

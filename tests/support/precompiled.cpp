@@ -1,0 +1,1 @@
+#include "catch.hpp" // a target to own the precompiled header needs a source
