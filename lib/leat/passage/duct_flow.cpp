@@ -36,6 +36,13 @@ bool worth_another_try(Outcome outcome)
     return outcome == Outcome::diverged || outcome == Outcome::stalled;
 }
 
+/// Whether a later attempt leaves the better state: one that does not converge either may have come less far.
+bool better(const cascade::Run<2>& later, const cascade::Run<2>& kept)
+{
+    const double before = kept.imbalances.worst();
+    return later.outcome == Outcome::cancelled || later.imbalances.worst() < before || !std::isfinite(before);
+}
+
 } // namespace
 
 coupling::FlowProblem<2> duct_problem(const Passage& passage, const Derived& derived, const Options& options)
@@ -115,10 +122,14 @@ DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const A
         if (may_choose) {
             settings.coupling = attempt.coupling;
             settings.coupling_settings.relaxation = attempt.relaxation;
-            flow.fallback = attempt.description;
         }
-        flow.cascade = std::make_unique<cascade::Cascade<2>>(grid, problem, guess, settings);
-        flow.run = cascade::nested_solve(*flow.cascade, run);
+        auto nested = std::make_unique<cascade::Cascade<2>>(grid, problem, guess, settings);
+        cascade::Run<2> done = cascade::nested_solve(*nested, run);
+        if (flow.cascade == nullptr || better(done, flow.run)) {
+            flow.cascade = std::move(nested);
+            flow.run = std::move(done);
+            flow.fallback = may_choose ? attempt.description : "";
+        }
         if (!may_choose || !worth_another_try(flow.run.outcome)) {
             break;
         }
