@@ -134,7 +134,7 @@ TEST_CASE("Every volume is closed", "[mesh]")
     }
 }
 
-TEST_CASE("Nodes lie in the middle of cells, or on the faces where shifted; ghosts on the sides", "[mesh]")
+TEST_CASE("Nodes lie in the middle of cells, or on the faces where shifted, ghosts on the sides", "[mesh]")
 {
     const Grid<2> grid = plane(Coordinates::cylindrical, 0.3);
     const ControlVolumes<2> shifted(grid, 1);
