@@ -12,7 +12,8 @@ namespace leat::cascade {
 struct CascadeSettings {
     leat::Coupling coupling = leat::Coupling::lines;
     coupling::Settings coupling_settings;
-    double coarsen_across_from = 0.7; ///< along the axis only until smallest dx/largest dy reaches this
+    bool may_hold = true;             ///< provide the memory for hold_linearisation()
+    double coarsen_across_from = 0.35; ///< along the axis only until smallest dx/largest dy reaches this
     int least_along = 8;              ///< no direction is coarsened below these
     int least_across = 4;
 };
@@ -36,6 +37,9 @@ public:
     void set_source(const coupling::FlowState<D>* source) noexcept { source_ = source; }
     /// Solves the balances of `level` for `cycles` V cycles (sweeps down, down, up, then the coarser grids).
     void cycle(int level);
+    /// From the next cycle on, the linearisations on `level` and coarser grids, the coarsest left out, are those of
+    /// their next visit. A further call renews them.
+    void hold_linearisation(int level) noexcept;
     /// One outer iteration of the coupling on `level` alone.
     void iterate(int level, bool backwards);
     /// First guess on `level` from the state of the next coarser one.
