@@ -1,6 +1,7 @@
 #include <leat/cascade/cascade.hpp>
 
 #include <algorithm>
+#include <utility>
 
 namespace leat::cascade {
 
@@ -58,7 +59,7 @@ void subtract(const coupling::FlowState<D>& a, const coupling::FlowState<D>& b, 
 
 template <int D>
 Cascade<D>::Cascade(const mesh::Grid<D>& finest, const coupling::FlowProblem<D>& problem,
-                    const coupling::FlowState<D>& boundary, const CascadeSettings& settings)
+                    coupling::FlowState<D> boundary, const CascadeSettings& settings)
 {
     mesh::Grid<D> grid = finest;
     while (true) {
@@ -71,9 +72,9 @@ Cascade<D>::Cascade(const mesh::Grid<D>& finest, const coupling::FlowProblem<D>&
         level.coupling = coupling::make_coupling<D>(settings.coupling, *level.equations, coupling_settings);
         level.residual = coupling::FlowState<D>(level.equations->layout());
         if (levels_.empty()) {
-            level.state = boundary;
+            level.state = std::move(boundary);
         } else {
-            level.state = level.source = level.before = level.residual;
+            level.state = level.source = level.residual;
             level.from_finer = std::make_unique<Transfer<D>>(*levels_.back().equations, *level.equations);
             level.from_finer->restrict_state(levels_.back().state, level.state);
         }
@@ -108,13 +109,14 @@ void Cascade<D>::descend(std::size_t l, const coupling::FlowState<D>* source)
     here.equations->residual(here.state, source, here.residual);
     Level& coarse = levels_[l + 1];
     coarse.from_finer->restrict_state(here.state, coarse.state);
-    coarse.before = coarse.state;
     // source = balances of the restricted state - restricted residual
     coarse.from_finer->restrict_residual(here.residual, coarse.residual);
     coarse.equations->residual(coarse.state, nullptr, coarse.source);
     subtract(coarse.source, coarse.residual, coarse.source);
     descend(l + 1, &coarse.source);
-    subtract(coarse.state, coarse.before, coarse.residual);
+    // The fine state has not moved: restricting it again costs less than keeping a copy.
+    coarse.from_finer->restrict_state(here.state, coarse.residual);
+    subtract(coarse.state, coarse.residual, coarse.residual);
     coarse.from_finer->prolong(coarse.residual, here.state, true);
 }
 
@@ -151,7 +153,7 @@ std::size_t Cascade<D>::bytes() const noexcept
 {
     std::size_t total = 0;
     for (const Level& level : levels_) {
-        const std::size_t states = level.from_finer == nullptr ? 2 : 4;
+        const std::size_t states = level.from_finer == nullptr ? 2 : 3;
         total += states * (D + 1) * level.state.pressure.size() * sizeof(double) + level.coupling->bytes();
     }
     return total;

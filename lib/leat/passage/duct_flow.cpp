@@ -99,7 +99,6 @@ DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const A
     flow.reynolds_number = derived.reynolds_number;
     const mesh::Grid<2> grid = flow.grid.grid();
     const coupling::FlowProblem<2> problem = duct_problem(passage, derived, options);
-    const coupling::FlowState<2> guess = first_guess(passage, derived, flow.grid);
 
     cascade::CascadeSettings settings;
     settings.coupling = options.coupling.value_or(leat::Coupling::lines);
@@ -117,7 +116,8 @@ DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const A
             settings.coupling_settings.relaxation = attempt.relaxation;
             flow.fallback = attempt.description;
         }
-        flow.cascade = std::make_unique<cascade::Cascade<2>>(grid, problem, guess, settings);
+        flow.cascade =
+            std::make_unique<cascade::Cascade<2>>(grid, problem, first_guess(passage, derived, flow.grid), settings);
         flow.run = cascade::nested_solve(*flow.cascade, run);
         if (!may_choose || !worth_another_try(flow.run.outcome)) {
             break;
