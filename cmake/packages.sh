@@ -1,8 +1,8 @@
 # Sourced by try.sh and test.sh: brings in what the machine lacks, and configures build/.
 
-leat_build_packages="g++ cmake make libeigen3-dev libhdf5-dev libboost-program-options-dev libudunits2-dev \
+leat_build_packages="g++ cmake make libhdf5-dev libboost-program-options-dev libudunits2-dev \
 nlohmann-json3-dev"
-leat_test_packages="catch2 hdf5-tools pkg-config python3 python3-h5py"
+leat_test_packages="catch2 libeigen3-dev hdf5-tools pkg-config python3 python3-h5py"
 
 # A package counts as there when it is installed, or, for a tool, when its command is found.
 leat_has_package()

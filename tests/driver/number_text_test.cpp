@@ -53,6 +53,9 @@ TEST_CASE("columns are aligned by characters, and lines are wrapped")
 {
     CHECK(aligned({{"a", "1", "\u00b5m"}, {"long", "22", "m"}, {"b"}}, 1, true) ==
           " a      1  \u00b5m\n long  22  m\n b\n");
-    const std::string text = wrapped("- ", std::string(60, 'a') + " " + std::string(60, 'b'));
+    std::string words(60, 'a');
+    words += ' ';
+    words.append(60, 'b');
+    const std::string text = wrapped("- ", words);
     CHECK(text == "- " + std::string(60, 'a') + "\n  " + std::string(60, 'b') + "\n");
 }

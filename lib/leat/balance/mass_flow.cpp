@@ -4,25 +4,26 @@ namespace leat::balance {
 
 template <int D>
 void MassFlow<D>::cell_faces(const Velocity& velocity, int d, const std::array<int, D>& row, int begin, int end,
-                             double scale, bool add, double* __restrict out) const
+                             double* __restrict out) const
 {
-    double factor = scale * density_;
-    for (int e = 0; e < D - 1; ++e) {
-        factor *= cells_->area_factor[d][e][row[e]];
-    }
+    const double factor = row_factor(d, row);
     std::array<int, D> first = row;
     first[D - 1] = 0;
     const double* __restrict u = velocity[d] + layout_.index(first);
     const double* __restrict area = cells_->area_factor[d][D - 1].data();
-    if (add) {
-        for (int j = begin; j < end; ++j) {
-            out[j] += factor * area[j] * u[j];
-        }
-    } else {
-        for (int j = begin; j < end; ++j) {
-            out[j] = factor * area[j] * u[j];
-        }
+    for (int j = begin; j < end; ++j) {
+        out[j] = factor * area[j] * u[j];
     }
+}
+
+template <int D>
+double MassFlow<D>::row_factor(int d, const std::array<int, D>& row) const noexcept
+{
+    double factor = density_;
+    for (int e = 0; e < D - 1; ++e) {
+        factor *= cells_->area_factor[d][e][row[e]];
+    }
+    return factor;
 }
 
 template <int D>
@@ -31,7 +32,7 @@ void MassFlow<D>::row(const Velocity& velocity, int d, const std::array<int, D>&
 {
     constexpr int last = D - 1;
     if (shift_ == mesh::ControlVolumes<D>::unshifted) {
-        cell_faces(velocity, d, row, begin, end, 1, false, out);
+        cell_faces(velocity, d, row, begin, end, out);
         return;
     }
     const int n = cells_->cells(shift_);
@@ -40,19 +41,24 @@ void MassFlow<D>::row(const Velocity& velocity, int d, const std::array<int, D>&
         --below[shift_];
         // The outermost faces of shifted volumes in their own direction are faces of the grid.
         if (d == shift_ && row[shift_] == 0) {
-            cell_faces(velocity, d, row, begin, end, 1, false, out);
+            cell_faces(velocity, d, row, begin, end, out);
         } else if (d == shift_ && row[shift_] == n + 1) {
-            cell_faces(velocity, d, below, begin, end, 1, false, out);
+            cell_faces(velocity, d, below, begin, end, out);
         } else {
-            cell_faces(velocity, d, below, begin, end, 0.5, false, out);
-            cell_faces(velocity, d, row, begin, end, 0.5, true, out);
+            std::array<int, D> first = row;
+            first[last] = 0;
+            const double here = 0.5 * row_factor(d, row);
+            const double before = 0.5 * row_factor(d, below);
+            const double* __restrict u = velocity[d] + layout_.index(first);
+            const double* __restrict u_before = u - layout_.stride[shift_];
+            const double* __restrict area = cells_->area_factor[d][last].data();
+            for (int j = begin; j < end; ++j) {
+                out[j] = area[j] * (before * u_before[j] + here * u[j]);
+            }
         }
         return;
     }
-    double factor = 0.5 * density_;
-    for (int e = 0; e < last; ++e) {
-        factor *= cells_->area_factor[d][e][row[e]];
-    }
+    const double factor = 0.5 * row_factor(d, row);
     std::array<int, D> first = row;
     first[last] = 0;
     const double* __restrict u = velocity[d] + layout_.index(first);

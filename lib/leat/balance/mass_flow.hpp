@@ -27,9 +27,11 @@ public:
     void row(const Velocity& velocity, int d, const std::array<int, D>& row, int begin, int end, double* out) const;
 
 private:
-    /// out[j] = (add to out[j]) scale * flow through the grid's own faces in direction d.
-    void cell_faces(const Velocity& velocity, int d, const std::array<int, D>& row, int begin, int end, double scale,
-                    bool add, double* out) const;
+    /// out[j] = flow through the grid's own faces in direction d.
+    void cell_faces(const Velocity& velocity, int d, const std::array<int, D>& row, int begin, int end,
+                    double* out) const;
+    /// Density x the area factors of a row.
+    double row_factor(int d, const std::array<int, D>& row) const noexcept;
 
     const mesh::ControlVolumes<D>* cells_;
     field::Layout<D> layout_;

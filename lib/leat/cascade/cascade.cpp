@@ -1,6 +1,7 @@
 #include <leat/cascade/cascade.hpp>
 
 #include <algorithm>
+#include <utility>
 
 namespace leat::cascade {
 
@@ -38,41 +39,47 @@ std::array<bool, D> halve(const mesh::Grid<D>& grid, const CascadeSettings& sett
     return wanted;
 }
 
+/// difference = a - b, which may be the same object as either.
 template <int D>
-void subtract(const coupling::FlowState<D>& a, coupling::FlowState<D>& b) // b = b - a
+void subtract(const coupling::FlowState<D>& a, const coupling::FlowState<D>& b, coupling::FlowState<D>& difference)
 {
-    for (int c = 0; c < D; ++c) {
-        for (std::size_t k = 0; k < a.pressure.size(); ++k) {
-            b.velocity[c][k] -= a.velocity[c][k];
+    const auto one = [](const field::Values& x, const field::Values& y, field::Values& out) {
+        const std::size_t n = x.size();
+        for (std::size_t k = 0; k < n; ++k) {
+            out[k] = x[k] - y[k];
         }
+    };
+    for (int c = 0; c < D; ++c) {
+        one(a.velocity[c], b.velocity[c], difference.velocity[c]);
     }
-    for (std::size_t k = 0; k < a.pressure.size(); ++k) {
-        b.pressure[k] -= a.pressure[k];
-    }
+    one(a.pressure, b.pressure, difference.pressure);
 }
 
 } // namespace
 
 template <int D>
 Cascade<D>::Cascade(const mesh::Grid<D>& finest, const coupling::FlowProblem<D>& problem,
-                    const coupling::FlowState<D>& boundary, const CascadeSettings& settings)
+                    coupling::FlowState<D> boundary, const CascadeSettings& settings)
 {
     mesh::Grid<D> grid = finest;
     while (true) {
         Level level;
         level.equations = std::make_unique<coupling::FlowEquations<D>>(grid, problem);
-        level.coupling = coupling::make_coupling<D>(settings.coupling, *level.equations, settings.coupling_settings);
+        const std::array<bool, D> halved = halve(grid, settings);
+        const bool coarsest = std::none_of(halved.begin(), halved.end(), [](bool h) { return h; });
+        coupling::Settings coupling_settings = settings.coupling_settings;
+        coupling_settings.may_hold = settings.may_hold && !coarsest;
+        level.coupling = coupling::make_coupling<D>(settings.coupling, *level.equations, coupling_settings);
         level.residual = coupling::FlowState<D>(level.equations->layout());
         if (levels_.empty()) {
-            level.state = boundary;
+            level.state = std::move(boundary);
         } else {
-            level.state = level.source = level.before = level.residual;
+            level.state = level.source = level.residual;
             level.from_finer = std::make_unique<Transfer<D>>(*levels_.back().equations, *level.equations);
             level.from_finer->restrict_state(levels_.back().state, level.state);
         }
         levels_.push_back(std::move(level));
-        const std::array<bool, D> halved = halve(grid, settings);
-        if (std::none_of(halved.begin(), halved.end(), [](bool h) { return h; })) {
+        if (coarsest) {
             break;
         }
         grid = grid.coarsened(halved);
@@ -102,15 +109,23 @@ void Cascade<D>::descend(std::size_t l, const coupling::FlowState<D>* source)
     here.equations->residual(here.state, source, here.residual);
     Level& coarse = levels_[l + 1];
     coarse.from_finer->restrict_state(here.state, coarse.state);
-    coarse.before = coarse.state;
     // source = balances of the restricted state - restricted residual
     coarse.from_finer->restrict_residual(here.residual, coarse.residual);
     coarse.equations->residual(coarse.state, nullptr, coarse.source);
-    subtract(coarse.residual, coarse.source);
+    subtract(coarse.source, coarse.residual, coarse.source);
     descend(l + 1, &coarse.source);
-    coarse.residual = coarse.state;
-    subtract(coarse.before, coarse.residual);
+    // The fine state has not moved: restricting it again costs less than keeping a copy.
+    coarse.from_finer->restrict_state(here.state, coarse.residual);
+    subtract(coarse.state, coarse.residual, coarse.residual);
     coarse.from_finer->prolong(coarse.residual, here.state, true);
+}
+
+template <int D>
+void Cascade<D>::hold_linearisation(int level) noexcept
+{
+    for (std::size_t l = static_cast<std::size_t>(level); l + 1 < levels_.size(); ++l) {
+        levels_[l].coupling->hold_linearisation();
+    }
 }
 
 template <int D>
@@ -138,7 +153,7 @@ std::size_t Cascade<D>::bytes() const noexcept
 {
     std::size_t total = 0;
     for (const Level& level : levels_) {
-        const std::size_t states = level.from_finer == nullptr ? 2 : 4;
+        const std::size_t states = level.from_finer == nullptr ? 2 : 3;
         total += states * (D + 1) * level.state.pressure.size() * sizeof(double) + level.coupling->bytes();
     }
     return total;

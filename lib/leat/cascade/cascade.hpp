@@ -12,8 +12,9 @@ namespace leat::cascade {
 struct CascadeSettings {
     leat::Coupling coupling = leat::Coupling::lines;
     coupling::Settings coupling_settings;
-    double coarsen_across_from = 0.7; ///< along the axis only until smallest dx/largest dy reaches this
-    int least_along = 8;              ///< no direction is coarsened below these
+    bool may_hold = true;              ///< provide the memory for hold_linearisation()
+    double coarsen_across_from = 0.35; ///< along the axis only until smallest dx/largest dy reaches this
+    int least_along = 8;               ///< no direction is coarsened below these
     int least_across = 4;
 };
 
@@ -24,8 +25,8 @@ template <int D>
 class Cascade {
 public:
     /// boundary: the boundary values on the finest grid (FlowState); its solved unknowns are the first guess.
-    Cascade(const mesh::Grid<D>& finest, const coupling::FlowProblem<D>& problem,
-            const coupling::FlowState<D>& boundary, const CascadeSettings& settings);
+    Cascade(const mesh::Grid<D>& finest, const coupling::FlowProblem<D>& problem, coupling::FlowState<D> boundary,
+            const CascadeSettings& settings);
 
     int levels() const noexcept { return static_cast<int>(levels_.size()); }
     coupling::FlowEquations<D>& equations(int level) noexcept { return *levels_[level].equations; }
@@ -36,6 +37,9 @@ public:
     void set_source(const coupling::FlowState<D>* source) noexcept { source_ = source; }
     /// Solves the balances of `level` for `cycles` V cycles (sweeps down, down, up, then the coarser grids).
     void cycle(int level);
+    /// From the next cycle on, the linearisations on `level` and coarser grids, the coarsest left out, are those of
+    /// their next visit. A further call renews them.
+    void hold_linearisation(int level) noexcept;
     /// One outer iteration of the coupling on `level` alone.
     void iterate(int level, bool backwards);
     /// First guess on `level` from the state of the next coarser one.
@@ -50,7 +54,7 @@ private:
         std::unique_ptr<coupling::FlowEquations<D>> equations;
         std::unique_ptr<coupling::FlowCoupling<D>> coupling;
         std::unique_ptr<Transfer<D>> from_finer;
-        coupling::FlowState<D> state, residual, source, before;
+        coupling::FlowState<D> state, residual, source;
     };
     void descend(std::size_t level, const coupling::FlowState<D>* source);
 

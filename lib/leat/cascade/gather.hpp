@@ -14,9 +14,13 @@ struct AxisGather {
     int end = 0;
     std::vector<int> first; ///< entry k - begin
     std::vector<std::array<double, 3>> weight;
+    bool copies = true; ///< target(k) = source(k) throughout
+
+    explicit AxisGather(int first_target = 0) : begin(first_target), end(first_target) {}
 
     void push(int source, std::array<double, 3> weights)
     {
+        copies = copies && source == end && weights[0] == 1 && weights[1] == 0 && weights[2] == 0;
         first.push_back(source);
         weight.push_back(weights);
         end = begin + static_cast<int>(first.size());

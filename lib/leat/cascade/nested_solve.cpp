@@ -7,7 +7,8 @@ namespace leat::cascade {
 
 namespace {
 
-constexpr double worse_start = 10;     // a coarse grid whose imbalance grew by this is no start for a finer one
+constexpr double worse_start = 10; // a coarse grid whose imbalance grew by this is no start for a finer one
+constexpr double slow_cycle = 0.3; // a cycle that leaves more than this of the imbalance has its linearisation renewed
 constexpr double worth_keeping = 0.1; // a state is copied when its imbalance is below this times the kept one's
 
 /// Runs one grid and keeps its books.
@@ -64,6 +65,7 @@ bool prepare_coarse(Cascade<D>& cascade, const RunSettings& settings, int level,
     const double first = runner.look(0).worst();
     double worst = first;
     if (settings.multigrid && level + 1 < cascade.levels()) {
+        cascade.hold_linearisation(level);
         cascade.cycle(level);
         worst = runner.look(++done).worst();
     } else {
@@ -87,6 +89,7 @@ void run_finest(Cascade<D>& cascade, const RunSettings& settings, Run<D>& run)
     monitor::Judge judge(settings.rules);
     coupling::FlowState<D> kept;
     double kept_imbalance = 0;
+    double previous = 0;
     for (int iteration = 0;; ++iteration) {
         run.imbalances = runner.look(iteration);
         const double worst = run.imbalances.worst();
@@ -112,6 +115,10 @@ void run_finest(Cascade<D>& cascade, const RunSettings& settings, Run<D>& run)
             kept_imbalance = worst;
         }
         if (settings.multigrid) {
+            if (iteration == 0 || worst > slow_cycle * previous) {
+                cascade.hold_linearisation(0);
+            }
+            previous = worst;
             cascade.cycle(0);
         } else {
             cascade.iterate(0, iteration % 2 == 1);

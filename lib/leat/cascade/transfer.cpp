@@ -11,8 +11,7 @@ using mesh::ControlVolumes;
 /// Mean over the fine nodes that make up each coarse node, weighted by `measure` (one-dimensional factors).
 AxisGather averages(int fine_cells, bool halved, bool nodal, const mesh::AxisTable& measure)
 {
-    AxisGather gather;
-    gather.begin = -1;
+    AxisGather gather(-1);
     const int cells = halved ? fine_cells / 2 : fine_cells;
     gather.push(-1, {1, 0, 0}); // ghost places hold boundary values
     for (int k = 0; k < cells + (nodal ? 1 : 0); ++k) {
@@ -32,8 +31,7 @@ AxisGather averages(int fine_cells, bool halved, bool nodal, const mesh::AxisTab
 
 AxisGather sums(int fine_cells, bool halved, bool nodal, int begin, int end)
 {
-    AxisGather gather;
-    gather.begin = begin;
+    AxisGather gather(begin);
     for (int k = begin; k < end; ++k) {
         if (!halved) {
             gather.push(k, {1, 0, 0});
@@ -51,8 +49,7 @@ AxisGather sums(int fine_cells, bool halved, bool nodal, int begin, int end)
 AxisGather interpolation(const mesh::AxisTable& fine, const mesh::AxisTable& coarse, int coarse_nodes, bool halved,
                          bool nodal, std::array<bool, 2> known, int begin, int end)
 {
-    AxisGather gather;
-    gather.begin = begin;
+    AxisGather gather(begin);
     for (int k = begin; k < end; ++k) {
         if (!halved) {
             gather.push(k, {1, 0, 0});

@@ -34,6 +34,7 @@ struct Settings {
     int momentum_sweeps = 2;          ///< SIMPLE, SIMPLEC: line sweeps per momentum balance, >= 1
     double pressure_tolerance = 0.05; ///< SIMPLE, SIMPLEC: reduction of the pressure-correction residual, (0, 1)
     int pressure_iterations = 30;     ///< SIMPLE, SIMPLEC: most inner iterations, >= 1
+    bool may_hold = false;            ///< lines: provide the memory for hold_linearisation(), 48 bytes per cell
 };
 
 /// The relaxation that serves best without knowing more (measured by benchmarks/couplings).
@@ -48,6 +49,9 @@ public:
     /// One outer iteration under Picard linearisation towards balances equal to `source` (null: zero).
     /// Sweeps go with the flow, or against it when `backwards`.
     virtual void iterate(FlowState<D>& state, const FlowState<D>* source, bool backwards) = 0;
+    /// From the next iteration on the linearisation of each part of the grid may be kept from its next visit; a further
+    /// call has it made anew. The solution is not touched by this, only the way to it. Needs Settings::may_hold.
+    virtual void hold_linearisation() noexcept {}
     /// Bytes held.
     virtual std::size_t bytes() const noexcept = 0;
 };

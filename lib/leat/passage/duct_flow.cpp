@@ -106,7 +106,6 @@ DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const A
     flow.reynolds_number = derived.reynolds_number;
     const mesh::Grid<2> grid = flow.grid.grid();
     const coupling::FlowProblem<2> problem = duct_problem(passage, derived, options);
-    const coupling::FlowState<2> guess = first_guess(passage, derived, flow.grid);
 
     cascade::CascadeSettings settings;
     settings.coupling = options.coupling.value_or(leat::Coupling::lines);
@@ -123,7 +122,8 @@ DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const A
             settings.coupling = attempt.coupling;
             settings.coupling_settings.relaxation = attempt.relaxation;
         }
-        auto nested = std::make_unique<cascade::Cascade<2>>(grid, problem, guess, settings);
+        auto nested =
+            std::make_unique<cascade::Cascade<2>>(grid, problem, first_guess(passage, derived, flow.grid), settings);
         cascade::Run<2> done = cascade::nested_solve(*nested, run);
         if (flow.cascade == nullptr || better(done, flow.run)) {
             flow.cascade = std::move(nested);
