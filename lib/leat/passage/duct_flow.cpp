@@ -91,11 +91,11 @@ coupling::FlowState<2> first_guess(const Passage& passage, const Derived& derive
     return state;
 }
 
-DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const Accuracy& accuracy,
-                         const Options& options, const Observer& observer, const std::stop_token& stop)
+DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const DuctGrid& duct, const Options& options,
+                         const Observer& observer, const std::stop_token& stop)
 {
     DuctFlow flow;
-    flow.grid = choose_grid(passage, derived, accuracy, options);
+    flow.grid = duct;
     flow.reynolds_number = derived.reynolds_number;
     const mesh::Grid<2> grid = flow.grid.grid();
     const coupling::FlowProblem<2> problem = duct_problem(passage, derived, options);

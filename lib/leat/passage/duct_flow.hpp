@@ -22,9 +22,9 @@ struct DuctFlow {
     coupling::FlowEquations<2>& equations() const { return cascade->equations(0); }
 };
 
-/// Sets up and solves a valid passage.
-DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const Accuracy& accuracy,
-                         const Options& options, const Observer& observer, const std::stop_token& stop);
+/// Sets up and solves a valid passage on one grid (Options::cells has no say here).
+DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const DuctGrid& grid, const Options& options,
+                         const Observer& observer, const std::stop_token& stop);
 
 /// The scheme, sides and properties of the scaled flow.
 coupling::FlowProblem<2> duct_problem(const Passage& passage, const Derived& derived, const Options& options);

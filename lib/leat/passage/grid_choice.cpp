@@ -67,6 +67,17 @@ mesh::Grid<2> DuctGrid::grid() const
     return {cylindrical ? mesh::Coordinates::cylindrical : mesh::Coordinates::cartesian, {along, across}};
 }
 
+bool DuctGrid::can_coarsen() const noexcept
+{
+    return along.size() % 2 == 1 && across.size() % 2 == 1 && end % 2 == 0;
+}
+
+DuctGrid DuctGrid::coarsened() const
+{
+    const mesh::Grid<2> coarse = grid().coarsened({true, true});
+    return {coarse.faces(0), coarse.faces(1), end / 2, cylindrical};
+}
+
 DuctGrid choose_grid(const Passage& passage, const Derived& derived, const Accuracy& accuracy, const Options& options)
 {
     const int per_half = cells_across(accuracy.band); // from a wall to the middle

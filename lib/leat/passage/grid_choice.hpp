@@ -18,6 +18,10 @@ struct DuctGrid {
     bool cylindrical = false;
 
     mesh::Grid<2> grid() const;
+    /// True where every second face can be left out in both directions, the end staying a face.
+    bool can_coarsen() const noexcept;
+    /// The grid whose cells are unions of two by two cells of this one; can_coarsen() must hold.
+    DuctGrid coarsened() const;
 };
 
 /// Cells along (tail excluded) and across, and their gradings, for a valid passage.

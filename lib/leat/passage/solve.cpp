@@ -64,7 +64,8 @@ Answer solve(const Passage& passage, const Accuracy& accuracy, const Options& op
              std::stop_token stop)
 {
     const Derived derived = checked(passage, accuracy, options);
-    const passage::DuctFlow flow = passage::solve_duct_flow(passage, derived, accuracy, options, observer, stop);
+    const passage::DuctFlow flow = passage::solve_duct_flow(
+        passage, derived, passage::choose_grid(passage, derived, accuracy, options), options, observer, stop);
     const passage::Readings readings = passage::read_duct(passage, derived, flow);
 
     Answer answer;
