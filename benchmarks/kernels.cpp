@@ -53,7 +53,7 @@ int main()
 
     const leat::Derived derived = leat::derive(passage);
     const leat::passage::DuctFlow flow = leat::passage::solve_duct_flow(
-        passage, derived, leat::passage::choose_grid(passage, derived, {}, options), options, {}, {});
+        passage, derived, leat::passage::make_grid(passage, derived, *options.cells), options, {}, {});
     leat::cascade::Cascade<2>& cascade = *flow.cascade;
 
     const auto count = static_cast<std::size_t>(2 * cells); // three arrays of two numbers per cell: 48 bytes

@@ -99,7 +99,7 @@ void check_budgets(const Duct& duct, double bound)
     options.cells = {{160, 40}};
     const Passage passage = passage_of(duct);
     const Derived derived = derive(passage);
-    const passage::DuctGrid grid = passage::choose_grid(passage, derived, {}, options);
+    const passage::DuctGrid grid = passage::make_grid(passage, derived, *options.cells);
     const passage::DuctFlow flow = passage::solve_duct_flow(passage, derived, grid, options, {}, {});
     INFO(duct.geometry << ", Re " << duct.reynolds_number << ": " << flow.run.message);
     REQUIRE(flow.run.outcome == Outcome::converged);

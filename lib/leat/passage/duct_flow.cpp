@@ -107,6 +107,7 @@ DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const D
         options.relaxation.value_or(coupling::default_relaxation(settings.coupling));
     cascade::RunSettings run;
     run.multigrid = settings.coupling == leat::Coupling::lines;
+    flow.multigrid = run.multigrid;
     run.rules = rules_for(options, run.multigrid);
     run.observer = observer;
     run.stop = stop;

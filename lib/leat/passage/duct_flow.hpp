@@ -16,7 +16,8 @@ struct DuctFlow {
     double reynolds_number = 0;
     std::unique_ptr<cascade::Cascade<2>> cascade; ///< level 0 holds the solution
     cascade::Run<2> run;
-    std::string fallback; ///< what had to be changed to converge; empty: nothing
+    bool multigrid = true; ///< an iteration of the run was a V cycle
+    std::string fallback;  ///< what had to be changed to converge; empty: nothing
 
     const coupling::FlowState<2>& state() const { return cascade->state(0); }
     coupling::FlowEquations<2>& equations() const { return cascade->equations(0); }
