@@ -11,7 +11,7 @@ namespace {
 constexpr double safety = 1.15;
 constexpr double too_fast = 2.5;     // weight of the departure when increments shrink faster than at second order
 constexpr double sign_change = 1.5;  // and when they change sign
-constexpr double least_order = 0.5;  // nothing slower is believed: the band would be without bound
+constexpr double least_order = 0.3;  // nothing slower is believed: the band would be without bound
 constexpr double formal_order = 2.0; // of every scheme but upwind, which shows by its apparent order
 
 // A number without a limit: increments that do not shrink.
@@ -24,7 +24,8 @@ struct Increment {
     double change = 0;
     double iteration_error = 0;
 
-    double size() const { return std::abs(change) + iteration_error; }
+    double most() const { return std::abs(change) + iteration_error; }
+    double least() const { return std::max(std::abs(change) - iteration_error, 0.0); }
 };
 
 Increment between(const GridValue& coarse, const GridValue& fine)
@@ -55,8 +56,8 @@ double richardson(const Increment& fine, const Increment& coarse)
 {
     const bool one_sign = fine.change * coarse.change > 0;
     const double order =
-        one_sign ? std::clamp(std::log2(coarse.size() / fine.size()), least_order, formal_order) : formal_order;
-    return safety * fine.size() / (std::exp2(order) - 1);
+        one_sign ? std::clamp(std::log2(coarse.least() / fine.most()), least_order, formal_order) : formal_order;
+    return safety * fine.most() / (std::exp2(order) - 1);
 }
 
 double weight_of_departure(const Increment& fine, const Increment& coarse)
@@ -64,7 +65,7 @@ double weight_of_departure(const Increment& fine, const Increment& coarse)
     if (!(fine.change * coarse.change > 0)) {
         return sign_change;
     }
-    return coarse.size() > 4 * fine.size() ? too_fast : 0; // slower shrinking is in the apparent order
+    return coarse.most() > 4 * fine.most() ? too_fast : 0; // slower shrinking is in the apparent order
 }
 
 } // namespace

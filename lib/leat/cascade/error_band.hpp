@@ -22,7 +22,7 @@ struct ErrorBand {
 /// Half-width of an interval around the value of the finest grid that is meant to hold the limit under refinement.
 /// `values`: one number on fully refined grids (each halved in every direction from the next), coarsest first; three
 /// are needed, the last four are used. With the increments i1 (finest less next), i2, i3 it is the sum of
-/// - safety x |i1|/(2^p - 1), p the apparent order of i1 and i2 within 0.5 .. 2 (Richardson; Roache 1994),
+/// - safety x |i1|/(2^p - 1), p the apparent order of i1 and i2 within 0.3 .. 2 (Richardson; Roache 1994),
 /// - the greater of two departures from second order: |i2 - 4 i1|/12, weighted (more when increments shrink faster than
 ///   second order allows, which cannot last; differently when they change sign), and |i3 - 4 i2|/48,
 /// - the iteration error of the finest grid; those of the others enlarge the increments.

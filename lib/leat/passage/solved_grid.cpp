@@ -14,6 +14,7 @@ constexpr double safety = 2;
 constexpr int probe_of_single_grid = 20; // iterations; one alone moves too little to be told from the sweep's direction
 constexpr double slowest_cycle = 0.9;    // rates are believed up to here: at the level of round-off there is none
 constexpr double slowest_probe = 0.99;
+constexpr double least_share = 0.1; // of the imbalance, relative: a number may stand still by chance
 constexpr double round_off = 1e-12; // of the value; the line solves leave about so much
 
 double worst_imbalance(DuctFlow& flow)
@@ -47,6 +48,7 @@ std::vector<double> estimate_iteration_errors(const Passage& passage, const Deri
     const double rate = go_on(flow);
     Numbers moved = make_numbers(passage, derived, read_duct(passage, derived, flow));
     flow.cascade->state(0) = solution;
+    const double standing = least_share * flow.run.imbalances.worst();
     std::vector<double> errors;
     const std::vector<ComputedNumber> later = computed_numbers(moved);
     for (const ComputedNumber& now : computed_numbers(numbers)) {
@@ -55,10 +57,10 @@ std::vector<double> estimate_iteration_errors(const Passage& passage, const Deri
             errors.push_back(0);
             continue;
         }
-        const double value = now.number->value;
+        const double size = std::abs(now.number->value);
         // A number that one more iteration takes away is as uncertain as it is large.
-        const double movement = then != nullptr ? std::abs(then->value - value) : std::abs(value);
-        errors.push_back(safety * movement / (1 - rate) + round_off * std::abs(value));
+        const double movement = then != nullptr ? std::abs(then->value - now.number->value) : size;
+        errors.push_back(safety * std::max(movement, standing * size) / (1 - rate) + round_off * size);
     }
     return errors;
 }

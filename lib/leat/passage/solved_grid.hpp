@@ -16,7 +16,8 @@ struct SolvedGrid {
 };
 
 /// Solves on one grid. When that converges, goes on a little to see how much each number still moves and how fast the
-/// imbalances fall: what is left is the movement/(1 - rate), with a factor for safety. Then returns to the solution.
+/// imbalances fall: what is left is the movement/(1 - rate), with a factor for safety, and no less relative to the
+/// value than a tenth of the imbalance. Then returns to the solution.
 SolvedGrid solve_grid(const Passage& passage, const Derived& derived, const DuctGrid& grid, const Options& options,
                       const Observer& observer, const std::stop_token& stop);
 
