@@ -39,10 +39,6 @@ TEST_CASE("a band cuts the digits that it makes meaningless")
     CHECK(with_band(number(8435.2345, 130.0)) == "8440 \u00b1 130");
     CHECK(with_band(number(8435.2345, 0.00996)) == "8435.235 \u00b1 0.010");
     CHECK(with_band(number(0.5, 20.0)) == "0.5 \u00b1 20");
-    CHECK(with_band(number(412.684, 0.55)) == "412.7 \u00b1 0.6");
-    CHECK(with_band(number(412.684, 0.21)) == "412.68 \u00b1 0.21");
-    CHECK(with_band(number(412.684, 0.201)) == "412.68 \u00b1 0.21"); // up, never down
-    CHECK(with_band(number(0.0503, 4e-5)) == "0.05030 \u00b1 4e-05");
     CHECK(with_band(number(8435.2345, std::nullopt)) == "8435.2");
 }
 

@@ -8,9 +8,9 @@ namespace leat::cascade {
 namespace {
 
 // Measured by benchmarks/band_coverage; DEVELOPERS.md lists what else was tried.
-constexpr double safety = 1.15;
-constexpr double too_fast = 2.5;     // weight of the departure when increments shrink faster than at second order
-constexpr double sign_change = 1.5;  // and when they change sign
+constexpr double safety = 1.2;
+constexpr double near_weight = 2;    // of the departure between the three finest grids
+constexpr double far_weight = 0.75;  // of that one grid coarser
 constexpr double least_order = 0.3;  // nothing slower is believed: the band would be without bound
 constexpr double formal_order = 2.0; // of every scheme but upwind, which shows by its apparent order
 
@@ -60,12 +60,12 @@ double richardson(const Increment& fine, const Increment& coarse)
     return safety * fine.most() / (std::exp2(order) - 1);
 }
 
-double weight_of_departure(const Increment& fine, const Increment& coarse)
+/// What increments that change sign, or shrink faster than second order allows, may hide. (Slower shrinking is in the
+/// apparent order.)
+double hidden(const Increment& fine, const Increment& coarse)
 {
-    if (!(fine.change * coarse.change > 0)) {
-        return sign_change;
-    }
-    return coarse.most() > 4 * fine.most() ? too_fast : 0; // slower shrinking is in the apparent order
+    const bool slower = fine.change * coarse.change > 0 && coarse.most() < 4 * fine.most();
+    return slower ? 0 : near_weight * departure(fine, coarse);
 }
 
 } // namespace
@@ -85,7 +85,7 @@ ErrorBand error_band(const std::vector<GridValue>& values)
     }
     const Increment first = between(values[count - 2], values[count - 1]);
     const Increment second = between(values[count - 3], values[count - 2]);
-    double departed = weight_of_departure(first, second) * departure(first, second);
+    double departed = hidden(first, second);
     if (count > 3) {
         const Increment third = between(values[count - 4], values[count - 3]);
         if (same_size(first, second) && same_size(second, third) && clear(first) && clear(second) && clear(third)) {
@@ -93,7 +93,7 @@ ErrorBand error_band(const std::vector<GridValue>& values)
             band.reason = "does not converge under refinement";
             return band;
         }
-        departed = std::max(departed, departure(second, third) / 4);
+        departed = std::max(departed, far_weight * departure(second, third) / 4);
     }
     band.half_width = richardson(first, second) + departed + values[count - 1].iteration_error;
     return band;

@@ -23,8 +23,8 @@ struct ErrorBand {
 /// `values`: one number on fully refined grids (each halved in every direction from the next), coarsest first; three
 /// are needed, the last four are used. With the increments i1 (finest less next), i2, i3 it is the sum of
 /// - safety x |i1|/(2^p - 1), p the apparent order of i1 and i2 within 0.3 .. 2 (Richardson; Roache 1994),
-/// - the greater of two departures from second order: |i2 - 4 i1|/12, weighted (more when increments shrink faster than
-///   second order allows, which cannot last; differently when they change sign), and |i3 - 4 i2|/48,
+/// - the greater of two departures from second order, weighted: |i2 - 4 i1|/12 where i1 and i2 differ in sign or shrink
+///   faster than second order allows, which cannot last; and |i3 - 4 i2|/48,
 /// - the iteration error of the finest grid; those of the others enlarge the increments.
 /// The weights were chosen by measured coverage (benchmarks/band_coverage). "Does not converge under refinement" is
 /// said only of four values whose increments have one sign and ratios between 0.9 and 1.1, well above the iteration
