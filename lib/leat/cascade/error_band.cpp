@@ -8,9 +8,9 @@ namespace leat::cascade {
 namespace {
 
 // Measured by benchmarks/band_coverage; DEVELOPERS.md lists what else was tried.
-constexpr double safety = 1.2;
-constexpr double near_weight = 2;    // of the departure between the three finest grids
-constexpr double far_weight = 0.75;  // of that one grid coarser
+constexpr double safety = 1.35;
+constexpr double near_weight = 2.5;  // of the departure between the three finest grids
+constexpr double far_weight = 1;     // of that one grid coarser
 constexpr double least_order = 0.3;  // nothing slower is believed: the band would be without bound
 constexpr double formal_order = 2.0; // of every scheme but upwind, which shows by its apparent order
 
