@@ -51,8 +51,9 @@ int main()
     options.cells = {{640, 160}};
     const double cells = 640.0 * 160.0;
 
-    const leat::passage::DuctFlow flow =
-        leat::passage::solve_duct_flow(passage, leat::derive(passage), {}, options, {}, {});
+    const leat::Derived derived = leat::derive(passage);
+    const leat::passage::DuctFlow flow = leat::passage::solve_duct_flow(
+        passage, derived, leat::passage::make_grid(passage, derived, *options.cells), options, {}, {});
     leat::cascade::Cascade<2>& cascade = *flow.cascade;
 
     const auto count = static_cast<std::size_t>(2 * cells); // three arrays of two numbers per cell: 48 bytes

@@ -11,7 +11,8 @@ namespace {
 const std::string channel_case = "[passage]\nshape = channel\ngap = 0.4 mm\nlength = 60 mm\noutlet = cut\n"
                                  "stations = 1 mm, 20 mm,60 mm\n"
                                  "[fluid]\ndensity = 1.2 kg/m^3\nkinematic_viscosity = 15 mm^2/s\n"
-                                 "[inlet]\nprofile = developed\nflow_rate = 96 L/min/m\n[accuracy]\nband = 0.1 %\n"
+                                 "[inlet]\nprofile = developed\nflow_rate = 96 L/min/m\n[accuracy]\nband = 0.1 "
+                                 "%\nband_on = development_length , core_velocity_ratio\n"
                                  "[numerics]\nscheme_along = quick\nscheme_across = van_leer\ncoupling = simplec\n"
                                  "cells = 320x48\nrelaxation = 0.8 0.25\niterations = 77\ntolerance = 1e-8\n";
 
@@ -42,6 +43,8 @@ TEST_CASE("a tube is read as stated")
     CHECK(of.passage.inlet.profile == InletProfile::flat);
     CHECK(of.passage.outlet == Outlet::continues);
     CHECK(of.accuracy.band == Accuracy{}.band);
+    CHECK(of.accuracy.band_on.empty());
+    CHECK(of.options.cell_budget == Options{}.cell_budget);
     CHECK(of.options.iterations == Options{}.iterations);
     CHECK(of.options.tolerance == Options{}.tolerance);
 }
@@ -57,6 +60,7 @@ TEST_CASE("every key of a case reaches its member")
     CHECK(of.passage.inlet.profile == InletProfile::developed);
     CHECK(of.passage.inlet.flow_rate.value() == Approx(1.6e-3).epsilon(1e-14));
     CHECK(of.accuracy.band == Approx(1e-3).epsilon(1e-14));
+    CHECK(of.accuracy.band_on == std::vector<std::string>{"development_length", "core_velocity_ratio"});
     CHECK(of.options.scheme_along == Scheme::quick);
     CHECK(of.options.scheme_across == Scheme::van_leer);
     CHECK(of.options.coupling == Coupling::simplec);

@@ -34,7 +34,7 @@ TEST_CASE("the table shows numbers with units, the handbook beside the pressure 
     CHECK(has(text, "8435.2  Pa"));
     CHECK(has(text, "8400  Pa"));
     CHECK(has(text, "handbook: Shah 1978\n"));
-    CHECK(has(text, "111.214 +- 0.012"));
+    CHECK(has(text, "111.214 \u00b1 0.013"));
     CHECK(has(text, "Note: handbook: high Reynolds numbers\n"));
     CHECK(has(text, "Note: development length: the passage ends before\n"));
     CHECK(has(text, "Imbalances: mass 3.1e-12, momentum 2.5e-11\n"));
@@ -52,6 +52,19 @@ TEST_CASE("numbers that may not be used are marked, each one")
     CHECK(has(text, "THESE NUMBERS ARE NOT USABLE"));
     CHECK(has(text, "! 8435.2"));
     CHECK(has(text, "! 111.214"));
+}
+
+TEST_CASE("a band wider than wanted is marked and explained; the other numbers are not")
+{
+    SolveReport report = report_of(Outcome::out_of_budget);
+    report.answer.usable = true;
+    report.answer.numbers.pressure_drop.band = 50;
+    report.answer.numbers.pressure_drop.reason = "the band is too wide";
+    const std::string text = solve_text(report, false);
+    CHECK(has(text, "! 8440 \u00b1 50  Pa"));
+    CHECK(has(text, "Note: pressure drop: the band is too wide\n"));
+    CHECK_FALSE(has(text, "! 111.214"));
+    CHECK_FALSE(has(text, "NOT USABLE"));
 }
 
 TEST_CASE("the document holds every key of the contract")

@@ -53,9 +53,10 @@ TEST_CASE("Every option out of range is a fault, all in one pass", "[options]")
     options.iterations = 0;
     options.tolerance = 0.1;
     options.stations = {0.5, 0.5, 2, -1, NAN};
-    CHECK(faulty({0.6}, options) == "accuracy.band options.cells options.relaxation.velocity "
-                                    "options.relaxation.pressure options.iterations options.tolerance "
-                                    "options.stations options.stations options.stations options.stations ");
+    CHECK(faulty({.band = 0.6, .band_on = {}}, options) ==
+          "accuracy.band options.cells options.relaxation.velocity "
+          "options.relaxation.pressure options.iterations options.tolerance "
+          "options.stations options.stations options.stations options.stations ");
     CHECK(faulty({9e-6}, {}) == "accuracy.band ");
     CHECK(faulty({NAN}, {}) == "accuracy.band ");
     options = {};
@@ -76,4 +77,18 @@ TEST_CASE("Stations are not measured against a length that is unknown", "[option
     options.stations = {2};
     CHECK(faulty({}, options, 0).empty());
     CHECK(faulty({}, options, 1) == "options.stations ");
+}
+
+TEST_CASE("A band is wanted on numbers that exist, and the cell budget has its range", "[options]")
+{
+    CHECK(faulty({0.002, {"development_length", "core_velocity_ratio"}}, {}).empty());
+    CHECK(faulty({0.002, {"core_velocity", "development_length", "reynolds_number"}}, {}) ==
+          "accuracy.band_on accuracy.band_on ");
+    Options options;
+    for (const int budget : {9999, 100000001}) {
+        options.cell_budget = budget;
+        CHECK(faulty({}, options) == "options.cell_budget ");
+    }
+    options.cell_budget = 10000;
+    CHECK(faulty({}, options).empty());
 }

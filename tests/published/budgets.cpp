@@ -98,7 +98,9 @@ void check_budgets(const Duct& duct, double bound)
     options.tolerance = 0.01 * bound;
     options.cells = {{160, 40}};
     const Passage passage = passage_of(duct);
-    const passage::DuctFlow flow = passage::solve_duct_flow(passage, derive(passage), {}, options, {}, {});
+    const Derived derived = derive(passage);
+    const passage::DuctGrid grid = passage::make_grid(passage, derived, *options.cells);
+    const passage::DuctFlow flow = passage::solve_duct_flow(passage, derived, grid, options, {}, {});
     INFO(duct.geometry << ", Re " << duct.reynolds_number << ": " << flow.run.message);
     REQUIRE(flow.run.outcome == Outcome::converged);
     const Section section = {flow.grid, flow.equations(), 1 / duct.reynolds_number, duct.geometry != "circular tube",

@@ -65,10 +65,33 @@ class Result(ProgramTest):
         out, err = self.run_leat("solve", self.write("line.case", TUBE + SMALL), code=0)
         self.assertEqual(err, "")
         self.assertRegex(out, r"\Aline: converged in [\d.]+ s")
-        self.assertRegex(out, r"(?m)^  pressure drop +[\d.]+  Pa ")
+        self.assertRegex(out, r"(?m)^  pressure drop +[\d.]+ ± [\d.]+  Pa ")
         self.assertRegex(out, r"(?m)^ +[\d.]+  Pa +handbook: .*Shah")
         self.assertRegex(out, r"(?m)^Imbalances: mass \S+, momentum \S+$")
         self.assertNotIn("\x1b", out)
+
+    def test_wanted_bands_are_met_by_refinement(self):
+        wish = "[accuracy]\nband = 0.5 %\nband_on = development_length, core_velocity_ratio\n"
+        document = self.document("solve", self.write("line.case", TUBE + wish))
+        for name in ("pressure_drop", "development_length", "core_velocity_ratio"):
+            number = document["numbers"][name]
+            self.assertGreater(number["band"], 0)
+            self.assertLessEqual(number["band"], 0.005 * number["value"], name)
+        self.assertGreaterEqual(len(document["grids"]), 3)
+
+    def test_cells_spent_before_the_wanted_band(self):
+        name = self.write("line.case", TUBE + "[accuracy]\nband = 0.001 %\n[numerics]\ncell_budget = 10000\n")
+        document = self.document("solve", name, code=1)
+        self.assertEqual(document["outcome"], "out_of_budget")
+        self.assertIs(document["usable"], True)
+        drop = document["numbers"]["pressure_drop"]
+        self.assertGreater(drop["band"], 1e-5 * drop["value"])
+        self.assertIn("budget of 10000 cells", drop["reason"])
+        along, across = document["grids"][-1]["cells"]
+        self.assertLessEqual(along * across, 10000)
+        out, err = self.run_leat("solve", name, code=1)
+        self.assertRegex(out, r"(?m)^  pressure drop +! [\d.]+ ± [\d.]+  Pa ")
+        self.assertNotIn("NOT USABLE", out)
 
     def test_developed_tube_is_the_formula_of_hagen_and_poiseuille(self):
         name = self.write("line.case", TUBE.replace("flat", "developed") + SMALL)

@@ -69,21 +69,30 @@ std::optional<Relaxation> read_relaxation(const Entries& entries)
     return Relaxation{.velocity = *velocity.value, .pressure = *pressure.value};
 }
 
+/// The items of a list, without the blanks around them; none for an entry that is missing.
+std::vector<Word> items_of(const Entry* entry)
+{
+    std::vector<Word> items;
+    Word rest = entry == nullptr ? Word{} : Word(entry->value);
+    while (!rest.empty()) {
+        const std::size_t comma = std::min(rest.find(','), rest.size());
+        items.push_back(trimmed(rest.substr(0, comma)));
+        rest.remove_prefix(std::min(comma + 1, rest.size()));
+    }
+    return items;
+}
+
 std::vector<double> read_stations(const Entries& entries)
 {
     const Entry* entry = entries.find("passage", "stations");
     std::vector<double> stations;
-    Word rest = entry == nullptr ? Word{} : Word(entry->value);
-    while (!rest.empty()) {
-        const std::size_t comma = std::min(rest.find(','), rest.size());
-        const Word item = trimmed(rest.substr(0, comma));
+    for (const Word item : items_of(entry)) {
         const Conversion read = read_quantity(item, Dimension::length, entries.units());
         if (read.value) {
             stations.push_back(*read.value);
         } else {
             entries.faults().add(entry->line, "[passage] stations, " + quoted(item) + ": " + read.fault);
         }
-        rest.remove_prefix(std::min(comma + 1, rest.size()));
     }
     return stations;
 }
@@ -94,6 +103,9 @@ Accuracy read_accuracy(const Entries& entries)
 {
     Accuracy accuracy;
     accuracy.band = entries.quantity("accuracy", "band", Dimension::ratio).value_or(accuracy.band);
+    for (const Word name : items_of(entries.find("accuracy", "band_on"))) {
+        accuracy.band_on.emplace_back(name);
+    }
     return accuracy;
 }
 
@@ -104,6 +116,7 @@ Options read_options(const Entries& entries)
     options.scheme_across = choice<Scheme>(entries, "scheme_across", scheme_names).value_or(options.scheme_across);
     options.coupling = choice<Coupling>(entries, "coupling", coupling_names);
     options.cells = read_cells(entries);
+    options.cell_budget = entries.whole_number(section, "cell_budget").value_or(options.cell_budget);
     options.relaxation = read_relaxation(entries);
     options.iterations = entries.whole_number(section, "iterations").value_or(options.iterations);
     options.tolerance = entries.number(section, "tolerance").value_or(options.tolerance);

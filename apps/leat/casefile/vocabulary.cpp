@@ -14,9 +14,9 @@ constexpr std::array<Word, 8> passage_keys{"shape",          "diameter", "gap", 
 constexpr std::array<Word, 3> fluid_keys{"density", "viscosity", "kinematic_viscosity"};
 constexpr std::array<Word, 6> inlet_keys{"profile",   "table",          "mean_velocity",
                                          "flow_rate", "mass_flow_rate", "reynolds_number"};
-constexpr std::array<Word, 1> accuracy_keys{"band"};
-constexpr std::array<Word, 7> numerics_keys{"scheme_along", "scheme_across", "coupling", "cells",
-                                            "relaxation",   "iterations",    "tolerance"};
+constexpr std::array<Word, 2> accuracy_keys{"band", "band_on"};
+constexpr std::array<Word, 8> numerics_keys{"scheme_along", "scheme_across", "coupling",   "cells",
+                                            "cell_budget",  "relaxation",    "iterations", "tolerance"};
 constexpr std::array<Word, 3> shapes{"tube", "channel", "annulus"};
 constexpr std::array<Word, 2> tube_sizes{"diameter", "length"};
 constexpr std::array<Word, 2> channel_sizes{"gap", "length"};

@@ -5,7 +5,7 @@ namespace leat::driver {
 /// What the program returns; part of its contract.
 enum class ExitCode {
     success = 0,
-    not_converged = 1,  ///< numbers printed, marked
+    not_converged = 1,  ///< or budget spent before the wanted band; numbers printed, marked
     diverged = 2,       ///< numbers printed, marked
     usage = 64,         ///< the command line is wrong
     invalid_case = 65,  ///< the case, or a file that it names, is wrong

@@ -37,15 +37,17 @@ A case
   [fluid]     density; viscosity or kinematic_viscosity
   [inlet]     [profile = flat | developed | table]; [table = FILE beside the case]; one of mean_velocity,
               flow_rate, mass_flow_rate, reynolds_number
-  [accuracy]  [band = 0.2 %]
+  [accuracy]  [band = 0.2 %] on the pressure drop; [band_on = development_length, ...] on these numbers too
   [numerics]  [scheme_along], [scheme_across] = upwind | central | power_law | linear_upwind | quick |
               van_leer | minmod; [coupling = simple | simplec | lines]; [cells = 160 x 40];
-              [relaxation = 0.9 0.3] (velocity, pressure); [iterations = 20000]; [tolerance = 1e-9]
+              [cell_budget = 400000]; [relaxation = 0.9 0.3] (velocity, pressure); [iterations = 20000];
+              [tolerance = 1e-9]
   A channel's flow is per metre of width (L/min/m, kg/(s.m)). A table is a file of comma-separated pairs
   under a line such as: radius [mm], velocity [m/s]
 
 Exit codes
-  0 converged, or valid    1 not converged: numbers marked    2 diverged: numbers marked
+  0 converged, or valid    1 not converged, or cells spent before the wanted band: numbers marked
+  2 diverged: numbers marked
   64 command line wrong    65 case wrong                      66 file unreadable
   70 fault of leat         73 cannot create, or exists        74 writing failed
   130 interrupted: numbers so far, marked

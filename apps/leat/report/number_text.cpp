@@ -68,10 +68,15 @@ std::string with_band(const Number& number)
     if (!number.band || *number.band <= 0) {
         return significant(number.value, 5);
     }
-    const int last = exponent_of(*number.band, 2) - 1; // decimal place of the band's second digit
+    // One digit of the band, two where it begins with 1 or 2; rounded up, so that what is printed holds too.
+    const double band = *number.band;
+    const int exponent = static_cast<int>(std::floor(std::log10(band)));
+    const int last = band < 3 * std::pow(10.0, exponent) ? exponent - 1 : exponent;
+    const double step = std::pow(10.0, last);
+    const double rounded = std::ceil(band / step * (1 - 1e-12)) * step;
     const int first = number.value == 0 ? last : exponent_of(number.value, 17);
     const int digits = std::clamp(first - last + 1, 1, 17);
-    return significant(number.value, digits) + " +- " + significant(*number.band, 2);
+    return significant(number.value, digits) + " \u00b1 " + significant(rounded, exponent_of(rounded, 17) - last + 1);
 }
 
 std::string duration_text(double seconds)

@@ -15,8 +15,8 @@ std::string shortest(double value, int digits);
 /// Two digits with exponent, for imbalances: "3.1e-12"; "0" for zero.
 std::string magnitude(double value);
 
-/// Only digits that mean something: down to the second digit of the band; without band 5 significant digits.
-/// "8435.2" or "8435.2 +- 1.3".
+/// Only digits that mean something: down to the last one of the band, which has one digit, or two where it begins with
+/// 1 or 2, and is rounded up; without band 5 significant digits. "8435.2", "8435.2 ± 1.3" or "412.7 ± 0.6".
 std::string with_band(const Number& number);
 
 /// A time for people: "0.21 s", "35 s", "12 min 5 s".

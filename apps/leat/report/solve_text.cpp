@@ -83,7 +83,7 @@ private:
     std::vector<Row> rows_;
 };
 
-std::vector<std::string> row_of(const NamedNumber& row, bool answer_usable, Notes& notes)
+std::vector<std::string> row_of(const NamedNumber& row, const Answer& answer, Notes& notes)
 {
     const std::string label = spaced(row.name);
     if (!row.number) {
@@ -91,11 +91,13 @@ std::vector<std::string> row_of(const NamedNumber& row, bool answer_usable, Note
         return {label, "-", "", "none, see note"};
     }
     const Number& number = *row.number;
-    if (answer_usable && !number.usable) {
-        notes.add(label, "not usable: " + number.reason);
+    if (answer.usable && !number.reason.empty()) {
+        notes.add(label, (number.usable ? "" : "not usable: ") + number.reason);
     }
-    return {label, (answer_usable && number.usable ? "" : "! ") + with_band(number),
-            row.unit == "1" ? "" : std::string(row.unit), std::string(row.meaning)};
+    const bool too_wide = answer.outcome == Outcome::out_of_budget && !number.reason.empty();
+    const bool clean = answer.usable && number.usable && !too_wide;
+    return {label, (clean ? "" : "! ") + with_band(number), row.unit == "1" ? "" : std::string(row.unit),
+            std::string(row.meaning)};
 }
 
 std::vector<std::string> handbook_row(const HandbookEstimate& handbook, Notes& notes)
@@ -115,15 +117,11 @@ std::string numbers(const Answer& answer)
     Notes notes;
     for (const NamedNumber& row : answer.named_numbers()) {
         if (row.number || !of_one_wall(row.name)) {
-            rows.push_back(row_of(row, answer.usable, notes));
+            rows.push_back(row_of(row, answer, notes));
         }
         if (row.name == "pressure_drop") {
             rows.push_back(handbook_row(answer.handbook, notes));
         }
-    }
-    const Number& drop = answer.numbers.pressure_drop;
-    if (answer.usable && !drop.band && !drop.reason.empty()) {
-        notes.add("pressure drop", drop.reason);
     }
     return aligned(rows, 2, true) + '\n' + notes.text();
 }

@@ -10,6 +10,7 @@ namespace leat::mesh {
 namespace {
 
 constexpr int least_coarse_cells = 5;     // of the passage on the coarsest grid
+constexpr int least_unit = 4;             // tails of any grid whose `cells` allow it can be halved twice
 constexpr double gentle_growth = 6;       // of ln(cell size) per `cells` cells of the tail
 constexpr int longest_tail = 2;           // in units of the passage's cells
 constexpr double logarithmic_share = 0.6; // of ln(outer/inner) taken up by the inner wall's extra clustering
@@ -61,7 +62,7 @@ DuctFaces along_duct(const AlongDuct& wish)
         return result;
     }
     int unit = 1;
-    while (wish.cells % (2 * unit) == 0 && wish.cells / (2 * unit) >= least_coarse_cells) {
+    while (wish.cells % (2 * unit) == 0 && (wish.cells / (2 * unit) >= least_coarse_cells || unit < least_unit)) {
         unit *= 2;
     }
     // derivative of the map at the end: length of one cell there, times the number of cells

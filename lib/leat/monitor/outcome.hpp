@@ -9,7 +9,8 @@ enum class Outcome {
     converged,     ///< every imbalance below the tolerance; numbers may be used
     stalled,       ///< no further progress; numbers marked unusable
     diverged,      ///< imbalances grew without bound; the best state seen is kept, numbers marked unusable
-    out_of_budget, ///< iterations spent before the tolerance was met; numbers marked unusable
+    out_of_budget, ///< iterations spent before the tolerance was met: numbers marked unusable; or cells spent before
+                   ///< the wanted band was met: numbers usable within their bands, those too wide with their reason
     cancelled      ///< the caller asked to stop; the best state so far, numbers marked unusable
 };
 

@@ -15,7 +15,7 @@ struct Number {
     double value = 0;             ///< always finite, SI
     std::optional<double> band{}; ///< half-width, same unit: holds the exact solution of the stated model
     bool usable = true;           ///< false: do not design with it, see reason
-    std::string reason{};           ///< why there is no band, or why it is not usable; else empty
+    std::string reason{};           ///< why there is no band, or one wider than wanted, or why it is not usable; else empty
 };
 
 /// The numbers of design and trade. Definitions follow Shah & London (1978): README, "What the numbers mean".
@@ -82,11 +82,11 @@ struct NamedColumn {
     Stations::Column values;
 };
 
-/// One grid that was worked on, coarsest first.
+/// One of the nested grids that were solved on, coarsest first, each halved in both directions from the next.
 struct GridReport {
     std::array<int, 2> cells{}; ///< along (tail included) and across
-    int iterations = 0;
-    double seconds = 0; ///< wall time; the only member of an Answer that differs between equal runs
+    int iterations = 0; ///< on this grid; its solve starts from still coarser ones of its own
+    double seconds = 0; ///< wall time of the whole solve on it; the only member of an Answer that differs between equal runs
 };
 
 /// The solution on the finest grid, SI. Point (i, j) has x = points_x[i], y = points_y[j]; i runs along, j across.

@@ -98,11 +98,11 @@ coupling::FlowState<2> first_guess(const Passage& passage, const Derived& derive
     return state;
 }
 
-DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const Accuracy& accuracy,
-                         const Options& options, const Observer& observer, const std::stop_token& stop)
+DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const DuctGrid& duct, const Options& options,
+                         const Observer& observer, const std::stop_token& stop)
 {
     DuctFlow flow;
-    flow.grid = choose_grid(passage, derived, accuracy, options);
+    flow.grid = duct;
     flow.reynolds_number = derived.reynolds_number;
     const mesh::Grid<2> grid = flow.grid.grid();
     const coupling::FlowProblem<2> problem = duct_problem(passage, derived, options);
@@ -113,6 +113,7 @@ DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const A
         options.relaxation.value_or(coupling::default_relaxation(settings.coupling));
     cascade::RunSettings run;
     run.multigrid = settings.coupling == leat::Coupling::lines;
+    flow.multigrid = run.multigrid;
     run.rules = rules_for(options, run.multigrid);
     run.observer = observer;
     run.stop = stop;

@@ -16,15 +16,16 @@ struct DuctFlow {
     double reynolds_number = 0;
     std::unique_ptr<cascade::Cascade<2>> cascade; ///< level 0 holds the solution
     cascade::Run<2> run;
-    std::string fallback; ///< what had to be changed to converge; empty: nothing
+    bool multigrid = true; ///< an iteration of the run was a V cycle
+    std::string fallback;  ///< what had to be changed to converge; empty: nothing
 
     const coupling::FlowState<2>& state() const { return cascade->state(0); }
     coupling::FlowEquations<2>& equations() const { return cascade->equations(0); }
 };
 
-/// Sets up and solves a valid passage.
-DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const Accuracy& accuracy,
-                         const Options& options, const Observer& observer, const std::stop_token& stop);
+/// Sets up and solves a valid passage on one grid (Options::cells has no say here).
+DuctFlow solve_duct_flow(const Passage& passage, const Derived& derived, const DuctGrid& grid, const Options& options,
+                         const Observer& observer, const std::stop_token& stop);
 
 /// The scheme, sides and properties of the scaled flow.
 coupling::FlowProblem<2> duct_problem(const Passage& passage, const Derived& derived, const Options& options);

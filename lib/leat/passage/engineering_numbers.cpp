@@ -8,7 +8,6 @@ namespace leat::passage {
 namespace {
 
 constexpr double development_tolerance = 0.01; // of the developed core velocity
-const char* const no_band = "no error band: the value of one grid, whose distance from the limit is not estimated";
 
 Number exact(double value)
 {
@@ -16,7 +15,7 @@ Number exact(double value)
 }
 Number computed(double value)
 {
-    return {value, std::nullopt, true, no_band};
+    return {value, std::nullopt, true, {}};
 }
 
 /// Mean of the friction over the passage by the trapezoidal rule over the axial faces.

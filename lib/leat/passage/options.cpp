@@ -1,5 +1,8 @@
 #include <leat/passage/options.hpp>
 
+#include <leat/passage/computed_numbers.hpp>
+
+#include <algorithm>
 #include <cmath>
 #include <string>
 
@@ -22,6 +25,20 @@ void require_cells(const std::array<int, 2>& cells, Faults& faults)
     if (!along_fits || !across_fits) {
         faults.add("options.cells", std::to_string(along) + " x " + std::to_string(across),
                    "along must be a multiple of 8 within 16 .. 5120, across a multiple of 4 within 8 .. 1280");
+    }
+}
+
+void require_names(const std::vector<std::string>& names, Faults& faults)
+{
+    const auto known = passage::computed_names();
+    for (const std::string& name : names) {
+        if (std::find(known.begin(), known.end(), name) == known.end()) {
+            std::string list;
+            for (const std::string_view one : known) {
+                list += (list.empty() ? "" : ", ") + std::string(one);
+            }
+            faults.add("accuracy.band_on", name, "must be one of " + list);
+        }
     }
 }
 
@@ -54,9 +71,11 @@ std::vector<Fault> faults_of(const Accuracy& accuracy, const Options& options, d
 {
     Faults faults;
     require_within("accuracy.band", accuracy.band, 1e-5, 0.5, faults);
+    require_names(accuracy.band_on, faults);
     if (options.cells) {
         require_cells(*options.cells, faults);
     }
+    require_within("options.cell_budget", options.cell_budget, 1e4, 1e8, faults);
     if (options.relaxation) {
         require_factor("options.relaxation.velocity", options.relaxation->velocity, faults);
         require_factor("options.relaxation.pressure", options.relaxation->pressure, faults);

@@ -110,6 +110,7 @@ void read_pressure(const Passage& passage, const DuctFlow& flow, const CoreReade
         readings.mean_pressure.push_back(0);
     }
     readings.core_pressure_inlet = field::interpolate(readings.pressure_at, readings.core_pressure, 0);
+    readings.mean_pressure_first = readings.mean_pressure.front();
     readings.mean_pressure_end =
         field::interpolate(readings.mean_at, readings.mean_pressure, flow.grid.along[flow.grid.end]);
 }

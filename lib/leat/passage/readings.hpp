@@ -24,6 +24,7 @@ struct Readings {
     std::vector<double> mean_pressure; ///< section mean
 
     double core_pressure_inlet = 0; ///< at x = 0
+    double mean_pressure_first = 0; ///< section mean in the first cells; behind a flat inlet it has no limit
     double mean_pressure_end = 0;   ///< at the end of the passage
     bool reverse_flow_end = false;  ///< somewhere in the end section the flow runs back
 };

@@ -2,10 +2,9 @@
 
 #include <leat/passage/cautions.hpp>
 #include <leat/passage/cell_fields.hpp>
-#include <leat/passage/duct_flow.hpp>
-#include <leat/passage/engineering_numbers.hpp>
+#include <leat/passage/computed_numbers.hpp>
 #include <leat/passage/handbook.hpp>
-#include <leat/passage/readings.hpp>
+#include <leat/passage/refinement.hpp>
 #include <leat/passage/stations.hpp>
 
 namespace leat {
@@ -30,20 +29,30 @@ Derived checked(const Passage& passage, const Accuracy& accuracy, const Options&
 void mark_unusable(Answer& answer)
 {
     const std::string reason = "the solve ended " + std::string(name(answer.outcome));
-    Numbers& n = answer.numbers;
-    for (Number* number :
-         {&n.pressure_drop, &n.pumping_power, &n.apparent_friction_factor, &n.apparent_friction_reynolds,
-          &n.incremental_pressure_number, &n.core_velocity_ratio, &n.peak_velocity_ratio}) {
-        number->usable = false;
-        number->reason = reason;
-    }
-    for (std::optional<Number>* number :
-         {&n.pressure_drop_from_rest, &n.development_length, &n.wall_shear_outlet, &n.wall_shear_outlet_inner,
-          &n.wall_shear_outlet_outer, &n.friction_reynolds_outlet, &n.wall_shear_mean}) {
-        if (*number) {
-            (*number)->usable = false;
-            (*number)->reason = reason;
+    for (const passage::ComputedNumber& row : passage::computed_numbers(answer.numbers)) {
+        if (row.number != nullptr) {
+            row.number->usable = false;
+            row.number->reason = reason;
         }
+    }
+}
+
+/// The grids worked on, and the history of each.
+void add_grids(const passage::Refinement& refined, Answer& answer)
+{
+    for (const passage::SolvedGrid& grid : refined.grids) {
+        const cascade::Run<2>& run = grid.flow.run;
+        GridReport report = {run.grids.back().cells, run.grids.back().iterations, 0};
+        for (const cascade::GridRun<2>& part : run.grids) { // the start from coarser grids counts too
+            report.seconds += part.seconds;
+        }
+        for (HistoryRow row : run.history) {
+            if (row.grid == run.history.back().grid) {
+                row.grid = static_cast<int>(answer.grids.size());
+                answer.history.push_back(row);
+            }
+        }
+        answer.grids.push_back(report);
     }
 }
 
@@ -64,29 +73,27 @@ Answer solve(const Passage& passage, const Accuracy& accuracy, const Options& op
              std::stop_token stop)
 {
     const Derived derived = checked(passage, accuracy, options);
-    const passage::DuctFlow flow = passage::solve_duct_flow(passage, derived, accuracy, options, observer, stop);
-    const passage::Readings readings = passage::read_duct(passage, derived, flow);
+    const passage::Refinement refined = passage::solve_nested(
+        passage, derived, passage::nested_grids(passage, derived, options), accuracy, options, observer, stop);
+    const passage::SolvedGrid& finest = refined.grids.back();
 
     Answer answer;
-    answer.outcome = flow.run.outcome;
-    answer.usable = answer.outcome == Outcome::converged;
-    answer.message = flow.run.message;
-    answer.imbalances = flow.run.imbalances;
-    answer.history = flow.run.history;
-    for (const cascade::GridRun<2>& grid : flow.run.grids) {
-        answer.grids.push_back({grid.cells, grid.iterations, grid.seconds});
-    }
-    answer.numbers = passage::make_numbers(passage, derived, readings);
-    answer.stations = passage::make_stations(passage, derived, options, readings);
+    answer.outcome = refined.outcome;
+    answer.usable = refined.usable;
+    answer.message = refined.message;
+    answer.imbalances = finest.flow.run.imbalances;
+    add_grids(refined, answer);
+    answer.numbers = refined.numbers;
+    answer.stations = passage::make_stations(passage, derived, options, finest.readings);
     answer.cautions = passage::cautions_before(passage, derived);
-    add_cautions(flow, readings, answer);
+    add_cautions(finest.flow, finest.readings, answer);
     answer.handbook = passage::handbook_estimate(passage, derived);
     answer.channel = std::holds_alternative<Channel>(passage.shape);
     if (!answer.usable) {
         mark_unusable(answer);
     }
     if (options.keep_fields) {
-        answer.fields = passage::make_fields(derived, flow, readings);
+        answer.fields = passage::make_fields(derived, finest.flow, finest.readings);
     }
     return answer;
 }
@@ -95,15 +102,17 @@ Plan plan(const Passage& passage, const Accuracy& accuracy, const Options& optio
 {
     Plan result;
     result.derived = checked(passage, accuracy, options);
-    const passage::DuctGrid grid = passage::choose_grid(passage, result.derived, accuracy, options);
+    const std::vector<passage::DuctGrid> grids = passage::nested_grids(passage, result.derived, options);
+    const std::size_t finest = passage::grid_for_band(grids, accuracy, options);
+    for (std::size_t k = 0; k <= finest; ++k) {
+        result.grids.push_back(grids[k].grid().cells());
+    }
+    const passage::DuctGrid& grid = grids[finest];
     cascade::CascadeSettings settings;
     settings.coupling = options.coupling.value_or(Coupling::lines);
     settings.coupling_settings.relaxation = coupling::default_relaxation(settings.coupling);
-    cascade::Cascade<2> nested(grid.grid(), passage::duct_problem(passage, result.derived, options),
-                               passage::first_guess(passage, result.derived, grid), settings);
-    for (int level = nested.levels() - 1; level >= 0; --level) {
-        result.grids.push_back(nested.equations(level).grid().cells());
-    }
+    const cascade::Cascade<2> nested(grid.grid(), passage::duct_problem(passage, result.derived, options),
+                                     passage::first_guess(passage, result.derived, grid), settings);
     const double diameter = result.derived.hydraulic_diameter;
     const std::size_t across = grid.across.size() - 1;
     result.first_cell_along = grid.along[1] * diameter;
