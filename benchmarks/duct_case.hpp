@@ -63,9 +63,7 @@ inline DuctCase duct_case(const Shape& shape, double reynolds, std::array<int, 2
     result.passage.inlet.mean_velocity = 1;
     result.passage.outlet = Outlet::cut;
     result.derived = derive(result.passage);
-    Options options;
-    options.cells = cells;
-    result.grid = passage::choose_grid(result.passage, result.derived, {}, options);
+    result.grid = passage::make_grid(result.passage, result.derived, cells);
     return result;
 }
 

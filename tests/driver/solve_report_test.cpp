@@ -54,7 +54,7 @@ TEST_CASE("numbers that may not be used are marked, each one")
     CHECK(has(text, "! 111.214"));
 }
 
-TEST_CASE("a band wider than wanted is marked and explained; the other numbers are not")
+TEST_CASE("a band wider than wanted is marked and explained, the other numbers are not")
 {
     SolveReport report = report_of(Outcome::out_of_budget);
     report.answer.usable = true;
