@@ -41,7 +41,7 @@ std::vector<std::string> cautions_before(const Passage& passage, const Derived& 
                            "(Vrentas, Duda & Bargeron 1966)");
     }
     const double lengths = derived.length / development_length_estimate(passage.shape, reynolds);
-    if (lengths > developed_passage) {
+    if (passage.inlet.profile == InletProfile::flat && lengths > developed_passage) {
         cautions.push_back(
             "length is " + beside(lengths, developed_passage) + " development lengths (Durst et al. 2005), above " +
             rounded_text(developed_passage) + ": the developed-flow formula with f Re = " +

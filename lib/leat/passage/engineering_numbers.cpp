@@ -64,10 +64,13 @@ void add_wall_numbers(const Passage& passage, const Derived& derived, const Read
             numbers.absent.push_back({name, "only an annulus has an inner and an outer wall"});
         }
     }
-    if (passage.inlet.profile != InletProfile::developed) {
+    if (passage.inlet.profile == InletProfile::flat) {
         numbers.absent.push_back(
             {"wall_shear_mean", "has no limit where the inlet profile meets the wall with a jump: the shear grows like "
                                 "1/distance from the corner; given for a developed inlet only"});
+    } else if (passage.inlet.profile == InletProfile::table) {
+        numbers.absent.push_back({"wall_shear_mean", "given for a developed inlet only: the shear beside the inlet "
+                                                     "depends on how the table meets the wall"});
     } else if (passage.outlet == Outlet::cut) {
         numbers.absent.push_back({"wall_shear_mean", "the wall shear at the cut end converges too slowly to be given"});
     } else {

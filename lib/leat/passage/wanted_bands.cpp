@@ -38,11 +38,11 @@ std::vector<MissedBand> missed_bands(const Passage& passage, const Derived& deri
         const double scale = std::max(std::abs(row.number->value), least);
         const std::string asked = rounded_text(100 * accuracy.band) + " % is wanted";
         if (!row.number->band) {
-            missed.push_back({row.number, "there is no band where " + asked});
+            missed.push_back({row.number, "there is no band on " + std::string(row.name) + " where " + asked});
         } else if (!(*row.number->band <= accuracy.band * scale)) {
             const std::string given =
                 scale > 0 ? rounded_text(100 * *row.number->band / scale) + " %" : "infinitely wide";
-            missed.push_back({row.number, "the band is " + given + " where " + asked});
+            missed.push_back({row.number, "the band on " + std::string(row.name) + " is " + given + " where " + asked});
         }
     }
     return missed;

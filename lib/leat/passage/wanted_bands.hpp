@@ -12,7 +12,7 @@ namespace leat::passage {
 /// A number whose band is wider than wanted, or that has none.
 struct MissedBand {
     Number* number;
-    std::string reason; ///< "the band is 0.31 % where 0.2 % is wanted"
+    std::string reason; ///< "the band on pressure_drop is 0.31 % where 0.2 % is wanted"
 };
 
 /// The numbers on which a band is wanted (the pressure drop and Accuracy::band_on) and is not met; absent ones ask for
