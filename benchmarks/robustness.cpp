@@ -127,7 +127,8 @@ Solve solve_with(const Sample& sample, double tolerance)
     options.tolerance = tolerance;
     Solve result;
     const double start = thread_seconds();
-    const passage::DuctFlow flow = passage::solve_duct_flow(sample.passage, derived, {}, options, {}, {});
+    const passage::DuctFlow flow = passage::solve_duct_flow(
+        sample.passage, derived, passage::make_grid(sample.passage, derived, *options.cells), options, {}, {});
     result.seconds = thread_seconds() - start;
     result.work_units = result.seconds / least_seconds(5, 0, [&] { flow.cascade->residual(0); });
     const passage::Readings readings = passage::read_duct(sample.passage, derived, flow);
